@@ -1,0 +1,65 @@
+// https://nuxt.com/docs/api/configuration/nuxt-config
+export default defineNuxtConfig({
+  future: { compatibilityVersion: 4 },
+  srcDir: '.',
+  serverDir: 'server',
+  compatibilityDate: '2026-12-01',
+  devtools: { enabled: false },
+  telemetry: false,
+  modules: ['@pinia/nuxt', '@nuxtjs/tailwindcss', 'nuxt-auth-utils', '@nuxt/eslint'],
+
+  app: {
+    head: {
+      htmlAttrs: { lang: 'en' },
+      titleTemplate: '%s · Jamnut',
+      meta: [
+        { name: 'viewport', content: 'width=device-width, initial-scale=1, viewport-fit=cover' },
+        { name: 'color-scheme', content: 'light dark' },
+      ],
+      link: [{ rel: 'icon', type: 'image/svg+xml', href: '/icon.svg' }],
+    },
+  },
+
+  css: ['~/assets/css/fonts.css'],
+  tailwindcss: { cssPath: '~/assets/css/tailwind.css', viewer: false },
+
+  // Components are named after their folder and file: components/bolt/Pattern.vue is <BoltPattern>.
+  components: [{ path: '~/components', pathPrefix: true }],
+  imports: { scan: true },
+
+  // The cookie holds only a session id; each route decides for itself whether it needs one.
+  auth: { loadStrategy: 'none' },
+  pinia: { storesDirs: ['./stores/**'] },
+  eslint: { config: { stylistic: { semi: false, quotes: 'single', braceStyle: '1tbs' }, standalone: true } },
+
+  experimental: {
+    appManifest: false,
+    defaults: { nuxtLink: { prefetchOn: { visibility: false, interaction: true } } },
+  },
+
+  typescript: {
+    strict: true,
+    tsConfig: {
+      compilerOptions: { noUncheckedIndexedAccess: true, noImplicitOverride: true },
+      exclude: ['../.data', '../.output', '../node_modules'],
+    },
+  },
+
+  nitro: {
+    compressPublicAssets: { gzip: true, brotli: true },
+    typescript: { strict: true },
+    // Sequelize asks for its driver by a computed name that no tracer sees.
+    externals: { traceInclude: ['node_modules/pg/lib/index.js'] },
+  },
+
+  hooks: {
+    // nuxt-auth-utils opens a session endpoint to everybody; ours is /api/auth/me.
+    'nitro:config'(config) {
+      config.handlers = config.handlers?.filter(handler => !handler.route?.startsWith('/api/_auth'))
+    },
+  },
+
+  runtimeConfig: {
+    session: { name: 'jamnut', maxAge: 60 * 60 * 12, password: '', cookie: { sameSite: 'lax', secure: false } },
+  },
+})
