@@ -24,7 +24,8 @@ export interface ProbabilityInput {
 const handPlacement = 0.02
 
 function between(lowerNm: number, upperNm: number, nm: number, uNm: number): number {
-  if (!(uNm > 0)) return nm >= lowerNm && nm <= upperNm ? 1 : 0
+  // Certain: inside or not, the last bits of a unit conversion aside.
+  if (!(uNm > 0)) return nm >= lowerNm * (1 - 1e-12) && nm <= upperNm * (1 + 1e-12) ? 1 : 0
   const p = normalCdf((upperNm - nm) / uNm) - normalCdf((lowerNm - nm) / uNm)
   return Math.min(1, Math.max(0, p))
 }
