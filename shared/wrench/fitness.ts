@@ -59,12 +59,13 @@ function* rangeReasons(input: FitnessInput, settingNm: number): Generator<Fitnes
   const { rangeMaxNm, rangeMinNm, calibratedRange } = input
   const lowest = calibratedRange?.minNm ?? Math.max(rangeMinNm, lowestShare * rangeMaxNm)
   const highest = calibratedRange?.maxNm ?? rangeMaxNm
+  const what = `A ${input.kind === 'setting' ? 'setting' : 'reading'} of ${nm(settingNm)}`
   const whose = calibratedRange ? 'its calibrated range' : 'its usable range'
   // A setting at the very end of the range is inside it; the last bits of a conversion must not decide.
   if (settingNm < lowest * (1 - 1e-9)) {
-    yield { code: 'below_range', text: `${nm(settingNm)} is below ${whose}, which begins at ${nm(lowest)}.`, hard: true }
+    yield { code: 'below_range', text: `${what} is below ${whose}, which begins at ${nm(lowest)}.`, hard: true }
   } else if (settingNm > highest * (1 + 1e-9)) {
-    yield { code: 'above_range', text: `${nm(settingNm)} is above ${whose}, which ends at ${nm(highest)}.`, hard: true }
+    yield { code: 'above_range', text: `${what} is above ${whose}, which ends at ${nm(highest)}.`, hard: true }
   } else if (settingNm < bestShares.from * rangeMaxNm * (1 - 1e-9)) {
     yield { code: 'low_in_range', text: 'Low in its range: a wrench is best between 30 and 80 % of its maximum.', hard: false }
   } else if (settingNm > bestShares.to * rangeMaxNm * (1 + 1e-9)) {

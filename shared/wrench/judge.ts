@@ -3,12 +3,15 @@ import { probabilityInBand } from '../torque/probability'
 import type { Stage } from '../torque/stages'
 import { toNm, type Quantity, type TorqueUnit } from '../torque/units'
 import { decisionRuleText, verdictOf, type Verdict } from '../torque/verdict'
+import type { WrenchKind } from './classes'
 import type { Figures } from './figures'
 
 export interface ReadingInput {
   /** What is set or shown on the wrench; at an angle stage the angle turned, in degrees. */
   value: number
   unit: TorqueUnit | 'deg'
+  /** Said for the record: setting and indicating wrenches are judged alike. */
+  kind?: WrenchKind
   stage: Stage
   adapter?: Adapter | null
   multiplierRatio?: number | null
