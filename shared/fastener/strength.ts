@@ -11,11 +11,11 @@ type Row = readonly [maxDiameterMm: number, proof: number, yielding: number, ten
 
 /** MPa. Source: ISO 898-1. Class 8.8 changes at 16 mm: 600 MPa holds above it only. */
 const metricClasses: Record<string, readonly Row[]> = {
-  '4.6': [[Infinity, 225, 240, 400]],
-  '5.8': [[Infinity, 380, 420, 520]],
-  '8.8': [[16, 580, 640, 800], [Infinity, 600, 660, 830]],
-  '10.9': [[Infinity, 830, 940, 1040]],
-  '12.9': [[Infinity, 970, 1100, 1220]],
+  4.6: [[Infinity, 225, 240, 400]],
+  5.8: [[Infinity, 380, 420, 520]],
+  8.8: [[16, 580, 640, 800], [Infinity, 600, 660, 830]],
+  10.9: [[Infinity, 830, 940, 1040]],
+  12.9: [[Infinity, 970, 1100, 1220]],
 }
 
 const mm = (inches: number) => inches * 25.4 + 1e-9

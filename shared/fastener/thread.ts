@@ -46,7 +46,8 @@ export function stressAreaInch(diameterIn: number, threadsPerInch: number): numb
 
 /** Coarse pitches, mm, by nominal diameter. Source: ISO 261, ISO 262. */
 const coarsePitchMm = new Map([
-  [5, 0.8], [6, 1], [7, 1], [8, 1.25], [10, 1.5], [12, 1.75], [14, 2], [16, 2], [18, 2.5], [20, 2.5], [22, 2.5], [24, 3],
+  [5, 0.8], [6, 1], [7, 1], [8, 1.25], [10, 1.5], [12, 1.75],
+  [14, 2], [16, 2], [18, 2.5], [20, 2.5], [22, 2.5], [24, 3],
 ])
 
 /** Threads per inch, coarse (UNC) and fine (UNF), by diameter in inches. Source: ASME B1.1, Shigley 9e Table 8-2. */

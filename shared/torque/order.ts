@@ -52,8 +52,8 @@ export function circleOrder(count: number): number[] {
 }
 
 /**
- * Straight row, from the centre out, sides alternating. Source: US Army TM 5-3805-298-23-2 (nine bolts: 9 7 5 3 1 2 4 6 8
- * as ranks). @throws RangeError when count is not a whole number from 1.
+ * Straight row, from the centre out, sides alternating. Source: US Army TM 5-3805-298-23-2 (nine bolts, as ranks:
+ * 9 7 5 3 1 2 4 6 8). @throws RangeError when count is not a whole number from 1.
  */
 export function rowOrder(count: number): number[] {
   checkCount(count)
@@ -88,7 +88,7 @@ export function twoRowsOrder(count: number): number[] {
   return columns % 2 === 1 ? [middle, columns + middle, ...rings] : rings
 }
 
-/** The product's own tightening order; "free" keeps the order in which the bolts are drawn. @throws RangeError as above. */
+/** The product's own tightening order; "free" keeps the order in which bolts are drawn. @throws RangeError as above. */
 export function orderFor(pattern: Pattern, count: number): number[] {
   if (pattern === 'circle') return circleOrder(count)
   if (pattern === 'row') return rowOrder(count)

@@ -40,7 +40,7 @@ function handUncertainty(adapter: Adapter | null): number {
 /**
  * Probability that the torque the fastener got lies inside the limits. It speaks of the wrench's error only, never of
  * clamp load. With certificate figures the applied torque is x/(1 + ā/100), normal, with
- * u = x·√((W/200)² + (r/(x√12))² + (0.02·E·cos θ/(L + E·cos θ))²), then carried to the fastener by the adapter's factor.
+ * u = x·√((W/200)² + (r/(x√12))² + (0.02·E·cos θ/(L + E·cos θ))²), then carried to the fastener by the factor.
  * Without, nothing is corrected and u = a/√3 from the permissible deviation a. Null where only W′ is known.
  * Source: JCGM 106 cl. 7 [memory]; the hand's place is our own assumption.
  */
@@ -65,7 +65,7 @@ export interface SimpleProbabilityInput {
   uncertaintyPercent: number | null | undefined
 }
 
-/** Probability in band of a torque whose expanded uncertainty is known, without correction; null when it is not given. */
+/** Probability in band of a torque whose expanded uncertainty is known, uncorrected; null when it is not given. */
 export function simpleProbability({ nm, lowerNm, upperNm, uncertaintyPercent }: SimpleProbabilityInput): number | null {
   if (uncertaintyPercent === null || uncertaintyPercent === undefined) return null
   return between(lowerNm, upperNm, nm, nm * uncertaintyPercent / 200)

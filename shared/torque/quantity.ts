@@ -52,7 +52,7 @@ function parseNumber(typed: string): ParsedNumber {
   const exponent = match?.[2] ?? ''
   const plain = (text: string) => /^(?:\d+\.?\d*|\.\d+)$/.test(text) ? Number(text + exponent) : 'unreadable'
   if (/^[1-9]\d{0,2},\d{3}$/.test(body)) return 'ambiguous'
-  if (/^\d{1,3}(?:,\d{3})+\.\d*$/.test(body) || /^\d{1,3}(?:,\d{3}){2,}$/.test(body)) return plain(body.replaceAll(',', ''))
+  if (/^\d{1,3}(?:,\d{3})+\.\d*$|^\d{1,3}(?:,\d{3}){2,}$/.test(body)) return plain(body.replaceAll(',', ''))
   if (/^\d{1,3}(?:\.\d{3})+,\d+$/.test(body)) return plain(body.replaceAll('.', '').replace(',', '.'))
   return plain(body.replace(',', '.'))
 }
@@ -65,7 +65,7 @@ const refuse = (message: string): ParsedQuantity => ({ ok: false, message })
  * `text` is what was typed, without the space around it. Source: own rule.
  */
 export function parseQuantity(text: string, fallbackUnit?: TorqueUnit): ParsedQuantity {
-  if (text.length > longestText) return refuse('That is too long for a torque. Write a number and a unit, such as 37 ft·lb.')
+  if (text.length > longestText) return refuse('Too long for a torque. Write a number and a unit, such as 37 ft·lb.')
   const typed = text.trim()
   if (typed === '') return refuse('Write a number and a unit, such as 37 ft·lb.')
   const match = /^([+\-−–]?)\s*([\d.,]*\d[\d.,]*(?:e[+-]?\d+)?)(.*)$/is.exec(typed.normalize('NFKC'))

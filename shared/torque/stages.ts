@@ -28,7 +28,7 @@ function scaled(limits: Limits, factor: number): Limits {
   return { targetNm: limits.targetNm * factor, lowerNm: limits.lowerNm * factor, upperNm: limits.upperNm * factor }
 }
 
-/** The spec's tolerance about a stage's own target; printed limits, and margins too wide for it, shrink in proportion. */
+/** The spec's tolerance about a stage's own target; printed limits, and margins too wide, shrink in proportion. */
 function aboutTarget(targetNm: number, limits: Limits, tolerance: Tolerance | null): Limits {
   const marginNm = tolerance?.kind === 'absolute' ? toNm(tolerance) : Infinity
   if (targetNm === limits.targetNm || marginNm >= targetNm) return scaled(limits, targetNm / limits.targetNm)
@@ -55,7 +55,11 @@ function stageOf(spec: StageSpec, number: number, limits: Limits, tolerance: Tol
  * A torque stage with the spec's own target has the spec's limits; another target takes the same tolerance.
  * @throws RangeError when a stage's torque or percent is not greater than zero.
  */
-export function stagesOf(limits: Limits, stages?: readonly StageSpec[] | null, tolerance: Tolerance | null = null): Stage[] {
+export function stagesOf(
+  limits: Limits,
+  stages?: readonly StageSpec[] | null,
+  tolerance: Tolerance | null = null,
+): Stage[] {
   if (!stages || stages.length === 0) return [{ ...blank, number: 1, kind: 'torque', ...limits }]
   return stages.map((spec, index) => stageOf(spec, index + 1, limits, tolerance))
 }

@@ -1,4 +1,4 @@
-import { configureMeasurements } from 'convert-units'
+import configureMeasurements from 'convert-units'
 
 /** The torque units the product knows, as they are written in JSON. */
 export const torqueUnits = ['N.m', 'lbf.ft', 'lbf.in', 'ozf.in', 'kgf.m', 'kgf.cm', 'cN.m', 'dN.m', 'kN.m'] as const

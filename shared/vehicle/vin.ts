@@ -22,9 +22,8 @@ const letterValues = new Map([
 const yearCodes = 'ABCDEFGHJKLMNPRSTVWXY123456789'
 
 /**
- * Model year from the code in position 10: a digit in position 7 means 1980–2009, a letter 2010–2039. Position 7 decides
- * for passenger cars, multi-purpose vehicles and light trucks only; heavier vehicles may be 30 years off.
- * Null where position 10 holds no year code. Source: 49 CFR 565.15(b).
+ * Model year from the code in position 10: a digit in position 7 means 1980–2009, a letter 2010–2039. That
+ * holds for passenger cars, multi-purpose vehicles and light trucks; heavier vehicles may be 30 years off. Null where position 10 holds no year code. Source: 49 CFR 565.15(b).
  */
 export function modelYearOf(vin: string): number | null {
   const index = yearCodes.indexOf(vin.charAt(9).toUpperCase() || ' ')
@@ -34,7 +33,7 @@ export function modelYearOf(vin: string): number | null {
 
 /**
  * Checks a VIN by length, letters and check digit, in that order; small letters count as capitals. A wrong check digit
- * is a reason to look again, not proof: it is mandatory for North America only, and genuine VINs from elsewhere fail it.
+ * is a reason to look again, not proof: it is mandatory for North America only, and genuine VINs from elsewhere fail.
  * Source: 49 CFR 565, Tables III to V.
  */
 export function checkVin(typed: string): VinCheck {
@@ -56,7 +55,7 @@ export function checkVin(typed: string): VinCheck {
   }, 0)
   const checkDigit = sum % 11 === 10 ? 'X' : String(sum % 11)
   if (vin.charAt(8) !== checkDigit) {
-    const message = `Its check digit is ${vin.charAt(8)}, but ${checkDigit} is expected. Look for a mistyped character; `
+    const message = `Its check digit is ${vin.charAt(8)}, but ${checkDigit} is expected. Look for a mistyped letter; `
       + 'VINs from outside North America may be right all the same.'
     return { ok: false, problem: 'check_digit', sum, checkDigit, modelYear: null, message }
   }

@@ -1,14 +1,11 @@
+import type { WrenchKind } from '../types/words'
+
 /** Types and classes of hand torque tools. Source: ISO 6789-1:2017 [memory]. */
 export const toolClasses = [
   'I-A', 'I-B', 'I-C', 'I-D', 'I-E', 'II-A', 'II-B', 'II-C', 'II-D', 'II-E', 'II-F', 'II-G',
 ] as const
 
 export type ToolClass = typeof toolClasses[number]
-
-/** A setting (click) wrench is set once; an indicating one (dial, electronic) is read at every bolt. */
-export const wrenchKinds = ['setting', 'indicating'] as const
-
-export type WrenchKind = typeof wrenchKinds[number]
 
 /** The wrench's class; without one a setting wrench counts as II-A, an indicating one as I-B. Source: own rule. */
 export function classOf(wrench: { kind: WrenchKind, toolClass?: ToolClass | null }): ToolClass {

@@ -1,14 +1,5 @@
 import dayjs from 'dayjs'
-
-export const wrenchStates = ['in_use', 'quarantined', 'at_laboratory', 'lost', 'retired'] as const
-
-export type WrenchState = typeof wrenchStates[number]
-
-export const calibrationStatuses = [
-  'valid', 'due_soon', 'overdue', 'none', 'quarantined', 'at_laboratory', 'lost', 'retired',
-] as const
-
-export type CalibrationStatus = typeof calibrationStatuses[number]
+import type { CalibrationStatus, WrenchState } from '../types/words'
 
 const dayMs = 86_400_000
 
@@ -47,6 +38,12 @@ export interface CalibrationStatusInput {
   intervalCycles: number | null | undefined
 }
 
+export interface CalibrationStanding {
+  status: CalibrationStatus
+  /** Days to dueOn, negative past it; null when nothing is due. */
+  daysLeft: number | null
+}
+
 /** From this share of the cycles on the wrench is due soon. Own rule. */
 const dueSoonShare = 0.9
 
@@ -56,7 +53,7 @@ const dueSoonShare = 0.9
  * Source: ISO 6789-1:2017 cl. 5.3, months or cycles, whichever comes first [memory].
  * @throws RangeError when a date is not YYYY-MM-DD.
  */
-export function calibrationStatus(input: CalibrationStatusInput): { status: CalibrationStatus, daysLeft: number | null } {
+export function calibrationStatus(input: CalibrationStatusInput): CalibrationStanding {
   const daysLeft = input.dueOn === null ? null : daysBetween(input.today, input.dueOn)
   if (input.state !== 'in_use') return { status: input.state, daysLeft }
   if (daysLeft === null) return { status: 'none', daysLeft }

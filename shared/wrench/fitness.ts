@@ -1,6 +1,5 @@
 import { formatNumber } from '../torque/quantity'
-import type { WrenchKind } from './classes'
-import type { CalibrationStatus } from './due'
+import type { CalibrationStatus, WrenchKind } from '../types/words'
 
 export const fitnessCodes = [
   'overdue', 'not_calibrated', 'quarantined', 'at_laboratory', 'lost', 'retired',
@@ -39,9 +38,10 @@ export interface FitnessInput {
   leftHand?: boolean
 }
 
-/** Below this share of its maximum a wrench without a certificate is not trusted. Source: US Army TM 1-1500-204-23-9. */
+/** Below this share of its maximum an uncertified wrench is not trusted. Source: US Army TM 1-1500-204-23-9. */
 const lowestShare = 0.2
 const bestShares = { from: 0.3, to: 0.8 }
+const bestUse = 'a wrench is best between 30 and 80 % of its maximum.'
 const coarsestShare = 0.1
 
 const unusable: Partial<Record<CalibrationStatus, { code: FitnessCode, text: string }>> = {
@@ -67,9 +67,9 @@ function* rangeReasons(input: FitnessInput, settingNm: number): Generator<Fitnes
   } else if (settingNm > highest * (1 + 1e-9)) {
     yield { code: 'above_range', text: `${what} is above ${whose}, which ends at ${nm(highest)}.`, hard: true }
   } else if (settingNm < bestShares.from * rangeMaxNm * (1 - 1e-9)) {
-    yield { code: 'low_in_range', text: 'Low in its range: a wrench is best between 30 and 80 % of its maximum.', hard: false }
+    yield { code: 'low_in_range', text: `Low in its range: ${bestUse}`, hard: false }
   } else if (settingNm > bestShares.to * rangeMaxNm * (1 + 1e-9)) {
-    yield { code: 'high_in_range', text: 'High in its range: a wrench is best between 30 and 80 % of its maximum.', hard: false }
+    yield { code: 'high_in_range', text: `High in its range: ${bestUse}`, hard: false }
   }
 }
 
@@ -85,10 +85,12 @@ function* uncertaintyReasons(input: FitnessInput): Generator<FitnessReason> {
   }
 }
 
+const isCounterclockwise = (direction: string) => /^(?:counter|anti|ccw|both)/.test(direction)
+
 /**
  * Whether a wrench suits a joint, with every reason in plain words. Hard: not valid, outside the calibrated range
- * (without a certificate: below 20 % of its maximum), W′ at or above half the band's width, left-hand thread and a wrench
- * that measures clockwise only. Hints never make it unfit: W′ above half of that, outside 30–80 % of the maximum, a
+ * (without a certificate: below 20 % of its maximum), W′ at or above half the band's width, a left-hand thread and a
+ * wrench that measures clockwise only. Hints never make it unfit: W′ above half of that, outside 30–80 % of the maximum, a
  * graduation above 10 % of the torque. Torques in N·m; limits and target at the fastener, ranges on the wrench.
  * Source: US Army TM 1-1500-204-23-9 Table 8-1 for the shares; the rest own rule.
  */
@@ -98,8 +100,9 @@ export function wrenchFitness(input: FitnessInput): { fit: boolean, reasons: Fit
   const state = unusable[input.status]
   if (state) reasons.push({ ...state, hard: true })
   reasons.push(...rangeReasons(input, settingNm), ...uncertaintyReasons(input))
-  if (input.leftHand && input.directions && !input.directions.some(direction => /^(?:counter|anti|ccw|both)/.test(direction))) {
-    reasons.push({ code: 'wrong_direction', text: 'The thread is left-hand and it measures clockwise only.', hard: true })
+  if (input.leftHand && input.directions && !input.directions.some(isCounterclockwise)) {
+    const text = 'The thread is left-hand and it measures clockwise only.'
+    reasons.push({ code: 'wrong_direction', text, hard: true })
   }
   if (input.graduationNm && input.graduationNm > coarsestShare * settingNm * (1 + 1e-9)) {
     const text = `Its graduation of ${nm(input.graduationNm)} is more than 10 % of the setting.`

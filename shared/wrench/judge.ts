@@ -3,7 +3,7 @@ import { probabilityInBand } from '../torque/probability'
 import type { Stage } from '../torque/stages'
 import { toNm, type Quantity, type TorqueUnit } from '../torque/units'
 import { decisionRuleText, verdictOf, type Verdict } from '../torque/verdict'
-import type { WrenchKind } from './classes'
+import type { WrenchKind } from '../types/words'
 import type { Figures } from './figures'
 
 export interface ReadingInput {
@@ -60,11 +60,11 @@ function deviationPercentOf({ biasPercent, wPercent, wPrimePercent }: Figures, p
 }
 
 /**
- * Torque at the fastener, verdict and probability of one reading, the same in the browser and on the server. Verdict and
- * `edge` look at the uncorrected torque with U = W′; the probability at the corrected one. A snug stage is never judged;
- * an angle has no torque, and a verdict only where its tolerance is printed.
- * @throws RangeError when the unit is not that of the stage (degrees for an angle, a torque for all others), a number is
- * missing, or the adapter makes no sense.
+ * Torque at the fastener, verdict and probability of one reading, the same in the browser and on the server. Verdict
+ * and `edge` look at the uncorrected torque with U = W′; the probability at the corrected one. A snug stage is never
+ * judged; an angle has no torque, and a verdict only where its tolerance is printed.
+ * @throws RangeError when the unit is not that of the stage (degrees for an angle, a torque for all others), a number
+ * is missing, or the adapter makes no sense.
  */
 export function judgeReading(input: ReadingInput): JudgedValue {
   const { value, unit, stage, permissiblePercent } = input
