@@ -22,8 +22,9 @@ const letterValues = new Map([
 const yearCodes = 'ABCDEFGHJKLMNPRSTVWXY123456789'
 
 /**
- * Model year from the code in position 10: a digit in position 7 means 1980–2009, a letter 2010–2039. That
- * holds for passenger cars, multi-purpose vehicles and light trucks; heavier vehicles may be 30 years off. Null where position 10 holds no year code. Source: 49 CFR 565.15(b).
+ * Model year from the code in position 10: a digit in position 7 means 1980–2009, a letter 2010–2039. That holds
+ * for passenger cars, multi-purpose vehicles and light trucks; heavier vehicles may be 30 years off.
+ * Null where position 10 holds no year code. Source: 49 CFR 565.15(b).
  */
 export function modelYearOf(vin: string): number | null {
   const index = yearCodes.indexOf(vin.charAt(9).toUpperCase() || ' ')
