@@ -36,12 +36,12 @@ export function stressAreaMetric(diameterMm: number, pitchMm: number): number {
 }
 
 /**
- * Stress area of an inch thread, (π/4)·(D − 0.9743/n)², in² from inches and threads per inch.
- * Source: ASME B1.1 as printed in Shigley 9e Table 8-2. @throws RangeError when diameter and pitch make no thread.
+ * Stress area of an inch thread, (π/4)·(D − 0.9743/n)², in² from inches and threads per inch,
+ * with the coefficient, 9√3/16, to six digits like the metric ones. Source: ASME B1.1, Shigley 9e Table 8-2. @throws RangeError when diameter and pitch make no thread.
  */
 export function stressAreaInch(diameterIn: number, threadsPerInch: number): number {
   checkThread(diameterIn, 1 / threadsPerInch)
-  return Math.PI / 4 * (diameterIn - 0.9743 / threadsPerInch) ** 2
+  return Math.PI / 4 * (diameterIn - 0.974279 / threadsPerInch) ** 2
 }
 
 /** Coarse pitches, mm, by nominal diameter. Source: ISO 261, ISO 262. */
