@@ -1,0 +1,11 @@
+import { existsSync, statfsSync } from 'node:fs'
+import { dirname } from 'node:path'
+import { Stop } from './say.mjs'
+
+/** Stops unless the disk of a folder (or of the first folder above it that exists) has so many megabytes free. */
+export function requireSpace(folder, megabytes) {
+  if (!existsSync(folder)) return requireSpace(dirname(folder), megabytes)
+  const { bavail, bsize } = statfsSync(folder)
+  const free = Math.floor(bavail * bsize / 1e6)
+  if (free < megabytes) throw new Stop('disk', `The disk is full: ${folder} has ${free} MB free, ${megabytes} MB are needed.`)
+}
