@@ -47,7 +47,8 @@ export default {
     },
     fontWeight: { normal: '400', medium: '500', semibold: '600' },
     extend: {
-      borderWidth: { rule: '1.5px', 3: '3px' },
+      borderWidth: { rule: '1.5px' },
+      outlineWidth: { 3: '3px' },
       // Target sizes: desk, anything in the bay, number keys, main buttons in the bay.
       spacing: { desk: '2.5rem', target: '3rem', key: '4.75rem', bay: '5rem' },
       maxWidth: { page: '93.75rem', reading: '42rem' },

@@ -10,7 +10,7 @@ export function bandScale(lowerNm: number, upperNm: number, from: number, to: nu
   const perNm = upperNm > lowerNm ? (to - from) / (upperNm - lowerNm) : 0
   const exact = (nm: number) => from + (nm - lowerNm) * perNm
   return {
-    place: nm => Math.min(width - edge, Math.max(edge, exact(nm))),
+    place: nm => Math.round(10 * Math.min(width - edge, Math.max(edge, exact(nm)))) / 10,
     beyond: nm => exact(nm) < edge || exact(nm) > width - edge,
   }
 }

@@ -35,11 +35,16 @@ export interface BoltLayout {
 
 /** Drawing units: the rim around a head, the flange around a bolt's centre, the room for a note beyond it. */
 export const rim = 31
-export const flange = 46
-const note = 26
+export const flange = 43
+const note = 30
 /** Least distance between two bolts. At 328 px of width twelve in a circle are then still 56 px apart. */
 const pitch = 76
 const widestSpan = 900
+
+/** Server and browser may differ in the last bits of a sine; the page must not. */
+function round(x: number): number {
+  return Math.round(x * 100) / 100
+}
 
 function circle(count: number): Point[] {
   if (count === 1) return [{ x: 0, y: 0 }]
@@ -51,7 +56,7 @@ function circle(count: number): Point[] {
 }
 
 function row(count: number): Point[] {
-  return Array.from({ length: count }, (_, index) => ({ x: index * pitch * 1.2, y: 0 }))
+  return Array.from({ length: count }, (_, index) => ({ x: index * pitch * 1.05, y: 0 }))
 }
 
 function twoRows(count: number): Point[] {
@@ -79,6 +84,8 @@ function extent(points: Point[]) {
   const top = Math.min(...ys)
   return { left, top, width: Math.max(...xs) - left, height: Math.max(...ys) - top }
 }
+
+const mean = (xs: number[]) => xs.reduce((sum, x) => sum + x, 0) / xs.length
 
 /** Corners of the convex hull (monotone chain). */
 function hull(points: Point[]): Point[] {
@@ -111,8 +118,10 @@ function openingOf(pattern: BoltPatternKind, points: Point[], middle: Point): Bo
   const { left, top, width, height } = extent(points)
   const first = points[0]
   if (pattern === 'circle' && first && points.length > 2) {
-    const radius = Math.hypot(first.x - middle.x, first.y - middle.y) * Math.cos(Math.PI / Math.max(points.length, 4)) - flange + 4
-    return radius < 20 ? null : { x: middle.x - radius, y: middle.y - radius, width: 2 * radius, height: 2 * radius, round: radius }
+    const radius = Math.hypot(first.x - middle.x, first.y - middle.y) * Math.cos(Math.PI / points.length) - flange + 4
+    return radius < 20
+      ? null
+      : { x: round(middle.x - radius), y: round(middle.y - radius), width: round(2 * radius), height: round(2 * radius), round: round(radius) }
   }
   if (pattern !== 'two_rows' || points.length < 4) return null
   const inset = flange - 4
@@ -133,19 +142,22 @@ export function layoutBolts(positions: readonly BoltPosition[], pattern: BoltPat
   if (drawn.length === 0) return { width: 0, height: 0, bolts: [], outline: [], opening: null }
   const { left, top, width, height } = extent(drawn)
   const margin = flange + note
-  const points = drawn.map(({ x, y }) => ({ x: x - left + margin, y: y - top + margin }))
-  const middle = { x: width / 2 + margin, y: height / 2 + margin }
+  const points = drawn.map(({ x, y }) => ({ x: round(x - left + margin), y: round(y - top + margin) }))
+  // Of a circle the centre, of anything else the middle of its extent.
+  const middle = pattern === 'circle'
+    ? { x: mean(points.map(point => point.x)), y: mean(points.map(point => point.y)) }
+    : { x: width / 2 + margin, y: height / 2 + margin }
   const bolts = points.map((point, index) => {
     const across = pattern === 'circle' || pattern === 'free'
     const dx = across || upright ? point.x - middle.x : 0
     const dy = across || !upright ? point.y - middle.y : 0
     const length = Math.hypot(dx, dy)
     const away = length > 1e-6 ? { x: dx / length, y: dy / length } : upright ? { x: 1, y: 0 } : { x: 0, y: 1 }
-    return { ...point, away, position: positions[index]?.position ?? index + 1 }
+    return { ...point, away: { x: round(away.x), y: round(away.y) }, position: positions[index]?.position ?? index + 1 }
   })
   return {
-    width: width + 2 * margin,
-    height: height + 2 * margin,
+    width: round(width + 2 * margin),
+    height: round(height + 2 * margin),
     bolts,
     outline: hull(points),
     opening: openingOf(pattern, points, middle),

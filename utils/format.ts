@@ -94,3 +94,8 @@ export function ordinal(place: number): string {
   if (lastTwo >= 11 && lastTwo <= 13) return `${place}th`
   return `${place}${{ 1: 'st', 2: 'nd', 3: 'rd' }[place % 10] ?? 'th'}`
 }
+
+/** A computed figure for columns and scales, so that the points stand in line: one decimal, more only below 1. */
+export function formatEven(value: number): string {
+  return value !== 0 && Math.abs(value) < 0.95 ? String(Number(value.toPrecision(3))) : value.toFixed(1)
+}
