@@ -37,7 +37,8 @@ export function stressAreaMetric(diameterMm: number, pitchMm: number): number {
 
 /**
  * Stress area of an inch thread, (π/4)·(D − 0.9743/n)², in² from inches and threads per inch,
- * with the coefficient, 9√3/16, to six digits like the metric ones. Source: ASME B1.1, Shigley 9e Table 8-2. @throws RangeError when diameter and pitch make no thread.
+ * with the coefficient, 9√3/16, to six digits like the metric ones. Source: ASME B1.1, Shigley 9e Table 8-2.
+ * @throws RangeError when diameter and pitch make no thread.
  */
 export function stressAreaInch(diameterIn: number, threadsPerInch: number): number {
   checkThread(diameterIn, 1 / threadsPerInch)

@@ -31,7 +31,7 @@ function scaled(limits: Limits, factor: number): Limits {
 /** The spec's tolerance about a stage's own target; printed limits, and margins too wide, shrink in proportion. */
 function aboutTarget(targetNm: number, limits: Limits, tolerance: Tolerance | null): Limits {
   const marginNm = tolerance?.kind === 'absolute' ? toNm(tolerance) : Infinity
-  if (targetNm === limits.targetNm || marginNm >= targetNm) return scaled(limits, targetNm / limits.targetNm)
+  if (targetNm === limits.targetNm || !(marginNm < targetNm)) return scaled(limits, targetNm / limits.targetNm)
   return { targetNm, lowerNm: targetNm - marginNm, upperNm: targetNm + marginNm }
 }
 

@@ -49,7 +49,8 @@ export function isTorqueUnit(x: unknown): x is TorqueUnit {
  * Source: exact definitions of lb, g_n, ft and in; agrees with GNU units 2.22 and NIST SP 811 B.8 [memory].
  */
 export function convertTorque(value: number, from: TorqueUnit, to: TorqueUnit): number {
-  return convert(value).from(from).to(to)
+  // The library takes NaN for zero; here what is no number must stay none.
+  return Number.isNaN(value) ? value : convert(value).from(from).to(to)
 }
 
 /** The torque in N·m, at full precision. */

@@ -91,7 +91,8 @@ const isCounterclockwise = (direction: string) => /^(?:counter|anti|ccw|both)/.t
  * Whether a wrench suits a joint, with every reason in plain words. Hard: not valid, outside the calibrated range
  * (without a certificate: below 20 % of its maximum), W′ at or above half the band's width, a left-hand thread and a
  * wrench that measures clockwise only. Hints never make it unfit: W′ above half of that, outside 30–80 % of the
- * maximum, a graduation above 10 % of the torque. Torques in N·m; limits and target at the fastener, ranges on the wrench.
+ * maximum, a graduation above 10 % of the torque. Torques in N·m; limits and target at the fastener, ranges on the
+ * wrench.
  * Source: US Army TM 1-1500-204-23-9 Table 8-1 for the shares; the rest own rule.
  */
 export function wrenchFitness(input: FitnessInput): { fit: boolean, reasons: FitnessReason[] } {
