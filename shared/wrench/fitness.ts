@@ -33,7 +33,7 @@ export interface FitnessInput {
   wPrimePercent: number | null
   /** Stands in for W′ where there is none, percent. */
   permissiblePercent: number
-  /** The directions the wrench measures in; nothing is said when absent. */
+  /** The directions the wrench measures in, clockwise and anticlockwise; nothing is said when absent. */
   directions?: readonly string[] | null
   leftHand?: boolean
 }
@@ -85,8 +85,6 @@ function* uncertaintyReasons(input: FitnessInput): Generator<FitnessReason> {
   }
 }
 
-const isCounterclockwise = (direction: string) => /^(?:counter|anti|ccw|both)/.test(direction)
-
 /**
  * Whether a wrench suits a joint, with every reason in plain words. Hard: not valid, outside the calibrated range
  * (without a certificate: below 20 % of its maximum), W′ at or above half the band's width, a left-hand thread and a
@@ -101,7 +99,7 @@ export function wrenchFitness(input: FitnessInput): { fit: boolean, reasons: Fit
   const state = unusable[input.status]
   if (state) reasons.push({ ...state, hard: true })
   reasons.push(...rangeReasons(input, settingNm), ...uncertaintyReasons(input))
-  if (input.leftHand && input.directions && !input.directions.some(isCounterclockwise)) {
+  if (input.leftHand && input.directions && !input.directions.includes('anticlockwise')) {
     const text = 'The thread is left-hand and it measures clockwise only.'
     reasons.push({ code: 'wrong_direction', text, hard: true })
   }

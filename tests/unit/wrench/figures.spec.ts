@@ -39,7 +39,7 @@ describe('figures of a calibration', () => {
   it('takes the direction asked for, else the worse of two', () => {
     const points = [
       point(60, 1, 1, { direction: 'clockwise' }),
-      point(60, -3, 1, { direction: 'counterclockwise' }),
+      point(60, -3, 1, { direction: 'anticlockwise' }),
     ]
     expect(figuresAt(points, 60, 'clockwise')).toMatchObject({ biasPercent: 1 })
     expect(figuresAt(points, 60, 'sideways')).toMatchObject({ biasPercent: -3 })

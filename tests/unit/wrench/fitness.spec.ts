@@ -64,7 +64,7 @@ describe('fitness of a wrench', () => {
     ['a coarse graduation', { graduationNm: 6 }, ['hint: graduation_coarse']],
     ['no graduation', { graduationNm: null }, []],
     ['left-hand thread, clockwise only', { leftHand: true }, ['hard: wrong_direction']],
-    ['left-hand thread, both ways', { leftHand: true, directions: ['clockwise', 'counterclockwise'] }, []],
+    ['left-hand thread, both ways', { leftHand: true, directions: ['clockwise', 'anticlockwise'] }, []],
     ['left-hand thread, directions unknown', { leftHand: true, directions: null }, []],
   ])('%s', (_, change, expected) => {
     expect(codes(change)).toEqual(expected)
