@@ -18,9 +18,10 @@ export default defineConfig(async () => ({
         },
       },
       {
-        resolve: { alias },
+        resolve: { alias: [...alias, { find: '#imports', replacement: `${root}tests/server/support/imports.ts` }] },
         test: {
           name: 'server',
+          server: { deps: { inline: ['nuxt-auth-utils'] } },
           environment: 'node',
           include: ['tests/server/**/*.spec.ts', 'tests/meta/database/**/*.spec.ts'],
           env: { TZ: 'UTC' },
