@@ -1,0 +1,31 @@
+import {
+  DataTypes, type InferAttributes, type InferCreationAttributes, type NonAttribute, type Sequelize,
+} from 'sequelize'
+import { key, required } from '../columns'
+import { ShopModel, shopOptions } from '../base'
+import type { User } from './user'
+
+/** A joint of the order that turned out not to be touched. */
+export class NotDisturbedMark
+  extends ShopModel<InferAttributes<NotDisturbedMark>, InferCreationAttributes<NotDisturbedMark>> {
+  declare id: string
+  declare fastenerGroupId: string
+  declare reason: string
+  declare at: Date
+  declare byUser: string
+  declare logSequence: number
+
+  declare by?: NonAttribute<User>
+}
+
+export function initNotDisturbedMark(sequelize: Sequelize) {
+  NotDisturbedMark.init({
+    id: key(),
+    shopId: required(DataTypes.UUID),
+    fastenerGroupId: required(DataTypes.UUID),
+    reason: required(DataTypes.TEXT),
+    at: required(DataTypes.DATE),
+    byUser: required(DataTypes.UUID),
+    logSequence: required(DataTypes.BIGINT),
+  }, shopOptions(sequelize, 'not_disturbed_marks'))
+}
