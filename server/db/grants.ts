@@ -28,12 +28,13 @@ export async function grantWebRole(sequelize: Sequelize, webRole: string): Promi
   const role = quote(webRole)
   const schema = quote(place.schema)
   const everybody = `PUBLIC, ${role}`
+  const kinds = ['TABLES', 'SEQUENCES', 'ROUTINES']
   const statements = [
     `REVOKE ALL ON DATABASE ${quote(place.database)} FROM ${everybody}`,
     `GRANT CONNECT ON DATABASE ${quote(place.database)} TO ${role}`,
     `REVOKE ALL ON SCHEMA ${schema} FROM ${everybody}`,
     `GRANT USAGE ON SCHEMA ${schema} TO ${role}`,
-    ...['TABLES', 'SEQUENCES', 'ROUTINES'].map(kind => `REVOKE ALL ON ALL ${kind} IN SCHEMA ${schema} FROM ${everybody}`),
+    ...kinds.map(kind => `REVOKE ALL ON ALL ${kind} IN SCHEMA ${schema} FROM ${everybody}`),
     ...tables.map(({ name }) => `GRANT ${privilegesOn(name)} ON ${schema}.${quote(name)} TO ${role}`),
   ]
   // In one transaction, so that a server that runs meanwhile is never without its rights.

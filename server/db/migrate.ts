@@ -10,7 +10,10 @@ import { appliedMigrations } from './pending'
 /** Any number, as long as it is always this one: two runners at once take turns. */
 const lockKey = 5_200_163
 
-const remember = { up: 'INSERT INTO "SequelizeMeta" (name) VALUES (:name)', down: 'DELETE FROM "SequelizeMeta" WHERE name = :name' }
+const remember = {
+  up: 'INSERT INTO "SequelizeMeta" (name) VALUES (:name)',
+  down: 'DELETE FROM "SequelizeMeta" WHERE name = :name',
+}
 
 /** One step and the note that it was taken, in one transaction: both are there or neither. */
 async function take(sequelize: Sequelize, migration: Migration, way: 'up' | 'down') {
