@@ -150,7 +150,7 @@ place_new_cluster() {
 }
 
 make_cluster() {
-  local new log who
+  local log who
   mkdir -p "$secrets"
   chmod 711 "$data"
   need_space "$data"
@@ -165,7 +165,7 @@ make_cluster() {
   cp "$secrets/pg-admin" "$work/password" # initdb reads it itself, so it has to be a real file that its user may read
   if is_root; then chown -R "$user:" "$work"; install -d -o "$user" -m 700 "$new"; fi
   as_server "$pg/initdb" -D "$new" -U jamnut_admin --pwfile="$work/password" --auth=scram-sha-256 --encoding=UTF8 \
-    --locale=C.UTF-8 --data-checksums ${JAMNUT_PG_THROWAWAY:+--no-sync} >"$log" 2>&1 </dev/null || { rm -rf "$new"; why initdb "$log"; }
+    --locale=C.UTF-8 --data-checksums ${JAMNUT_PG_THROWAWAY:+--no-sync} >"$log" 2>&1 </dev/null || why initdb "$log"
   cat >>"$new/postgresql.conf" <<CONF
 
 # Jamnut
@@ -238,8 +238,10 @@ drop() {
 
 # ---- the verbs ----------------------------------------------------------------------------------------------------
 
-work=
-trap 'rm -rf "$work"' EXIT
+work='' new=''
+trap 'rm -rf "$work" "$new"' EXIT
+trap 'exit 130' INT # after the step at hand: nothing is left half made
+trap 'exit 143' TERM
 check_owner
 if ! has_cluster; then
   case $verb in

@@ -28,6 +28,12 @@ export function launch(command, args, { env = process.env, stdio = 'inherit', gr
 /** Waits for the end of a launched program: its exit code; 1 when a signal ended it. */
 export const ended = child => endings.get(child)
 
+/** A file for a program's words. A full disk loses words, it does not end the program that hears them. */
+export function openLog(path) {
+  mkdirSync(dirname(path), { recursive: true })
+  return createWriteStream(path).on('error', () => {})
+}
+
 /**
  * Runs a program to its end: `{ code, output }`. With `quiet` its words are kept in `output` instead of being shown, and
  * with `log`, a path, written there as well.
@@ -35,8 +41,7 @@ export const ended = child => endings.get(child)
 export async function run(command, args, { quiet = false, log, ...options } = {}) {
   if (!quiet) return { code: await ended(launch(command, args, options)), output: '' }
   const child = launch(command, args, { ...options, stdio: ['ignore', 'pipe', 'pipe'] })
-  if (log) mkdirSync(dirname(log), { recursive: true })
-  const file = log && createWriteStream(log)
+  const file = log && openLog(log)
   const chunks = []
   for (const stream of [child.stdout, child.stderr]) {
     stream.on('data', (chunk) => {

@@ -1,9 +1,7 @@
-import { createWriteStream, mkdirSync } from 'node:fs'
 import http from 'node:http'
 import https from 'node:https'
-import { dirname } from 'node:path'
 import { serverEntry } from './build.mjs'
-import { ended, launch, stop } from './run.mjs'
+import { ended, launch, openLog, stop } from './run.mjs'
 import { Stop } from './say.mjs'
 import { whyNot } from './port.mjs'
 
@@ -49,8 +47,9 @@ export async function serve({ host, port, env, log, args = [serverEntry], second
     stdio: ['ignore', 'pipe', 'pipe'],
     group: true,
   })
-  if (log) mkdirSync(dirname(log), { recursive: true })
-  const [out, err] = log ? [createWriteStream(log, { flags: 'a' })].flatMap(file => [file, file]) : [process.stdout, process.stderr]
+  const file = log && openLog(log)
+  const out = file ?? process.stdout
+  const err = file ?? process.stderr
   let words = ''
   child.stdout.on('data', chunk => out.write(chunk))
   child.stderr.on('data', (chunk) => {

@@ -1,15 +1,16 @@
-import { readdirSync, readFileSync } from 'node:fs'
+import { existsSync, readdirSync, readFileSync } from 'node:fs'
 
 /** The name of the variable by which a run's processes are known, whatever process group they moved to. */
 export const mark = 'JAMNUT_TEST_RUN'
 
-/** The ids of living processes that carry this run's mark in their environment. */
-export function marked(value) {
-  return readdirSync('/proc').filter(name => /^\d+$/.test(name)).map(Number).filter((pid) => {
+/** The living processes that carry a run's mark in their environment: [{ pid, run }]. */
+function marked() {
+  return readdirSync('/proc').filter(name => /^\d+$/.test(name) && Number(name) !== process.pid).flatMap((pid) => {
     try {
-      return pid !== process.pid && readFileSync(`/proc/${pid}/environ`, 'utf8').split('\0').includes(`${mark}=${value}`)
+      const entry = readFileSync(`/proc/${pid}/environ`, 'utf8').split('\0').find(text => text.startsWith(`${mark}=`))
+      return entry ? [{ pid: Number(pid), run: entry.slice(mark.length + 1) }] : []
     } catch {
-      return false // gone, or another user's
+      return [] // gone, or another user's
     }
   })
 }
@@ -24,11 +25,20 @@ function signal(pids, name) {
   }
 }
 
-/** Ends what a run has left behind, a browser say; kills what does not listen within two seconds. */
-export async function sweep(value) {
-  signal(marked(value), 'SIGTERM')
-  for (const end = Date.now() + 2000; Date.now() < end && marked(value).length > 0;) {
+async function end(find) {
+  const pids = () => marked().filter(find).map(({ pid }) => pid)
+  signal(pids(), 'SIGTERM')
+  for (const limit = Date.now() + 2000; Date.now() < limit && pids().length > 0;) {
     await new Promise(resolve => setTimeout(resolve, 50))
   }
-  signal(marked(value), 'SIGKILL')
+  signal(pids(), 'SIGKILL')
 }
+
+/** A name for this run. It begins with the id of its process, so that others can tell whether that still lives. */
+export const newRun = () => `${process.pid}-${Date.now()}`
+
+/** Ends what a run has left behind, a browser say; kills what does not listen within two seconds. */
+export const sweep = run => end(process => process.run === run)
+
+/** The same for all runs that were killed themselves. */
+export const sweepAbandoned = () => end(process => !existsSync(`/proc/${process.run.split('-')[0]}`))

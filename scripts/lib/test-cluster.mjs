@@ -18,8 +18,8 @@ function withoutDatabase(env = process.env) {
   return rest
 }
 
-/** Removes what runs that were killed have left, their servers too. */
-async function removeAbandoned() {
+/** Removes the clusters of runs that were killed, their servers too. */
+export async function dropAbandoned() {
   if (!existsSync(parent)) return
   const folders = readdirSync(parent).filter(name => /^test-\d+$/.test(name) && !existsSync(`/proc/${name.slice(5)}`))
   for (const name of folders) await remove(inRoot(parent, name))
@@ -27,7 +27,6 @@ async function removeAbandoned() {
 
 /** Makes this run's cluster. One for measuring writes as safely as a real one. */
 export async function makeCluster({ durable }) {
-  await removeAbandoned()
   await postgres(['start', testDataDir], { env: { ...withoutDatabase(), ...(!durable && { JAMNUT_PG_THROWAWAY: '1' }) } })
 }
 

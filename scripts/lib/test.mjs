@@ -11,11 +11,11 @@ import { duration, explain, say } from './say.mjs'
 import { openSecrets } from './secrets.mjs'
 import { serve } from './server.mjs'
 import { chosen, needs } from './suites.mjs'
-import { mark, sweep } from './sweep.mjs'
-import { dropCluster, makeCluster, makeDatabase, testDataDir } from './test-cluster.mjs'
+import { mark, newRun, sweep, sweepAbandoned } from './sweep.mjs'
+import { dropAbandoned, dropCluster, makeCluster, makeDatabase, testDataDir } from './test-cluster.mjs'
 
 const began = Date.now()
-const run = `${process.pid}-${began}`
+const run = newRun()
 let total = none
 
 /** The environment of all that a run starts: nothing of ours that happens to be set reaches it. */
@@ -63,7 +63,6 @@ async function withServer(name, env, work) {
   const urls = await makeDatabase(`jamnut_${name}`, env, { demo: true })
   const { DATABASE_URL } = urls
   const log = inRoot(artifacts, `server-${name}.log`)
-  rmSync(log, { force: true })
   const { child, url } = await serve({
     host: '127.0.0.1', port: await freePort(), env: { ...env, DATABASE_URL, NODE_ENV: 'production' }, log,
   })
@@ -87,6 +86,8 @@ export async function test(args) {
   const env = { ...clean, JAMNUT_DATA_DIR: testDataDir }
 
   const prepared = await step('set-up', async () => {
+    await dropAbandoned()
+    await sweepAbandoned()
     await ensurePackages()
     if (need.chromium) env.JAMNUT_CHROMIUM = await ensureChromium()
     if (!need.cluster) return
@@ -113,18 +114,18 @@ export async function test(args) {
   return total.failed ? 1 : 0
 }
 
-/** After a signal: counted as a failure, for nobody knows what the rest would have said. */
+/** After a signal. */
 export function interrupted(code) {
   console.error('\ntest       interrupted')
-  total = add(total, { passed: 0, failed: 1 })
   return code
 }
 
-/** Leaves nothing running, then says the last line. */
+/** Leaves nothing running, then says the last line. A run that did not come to its end counts as a failure. */
 export async function finish(code) {
+  if (code !== 0 && total.failed === 0) total = add(total, { passed: 0, failed: 1 })
   await dropCluster()
   await sweep(run)
   console.log(`\ntest       took ${duration(Date.now() - began)}`)
   console.log(summary(total))
-  return total.failed && !code ? 1 : code
+  return code
 }
