@@ -1,5 +1,5 @@
 import { existsSync, rmSync, writeFileSync } from 'node:fs'
-import { requireSpace } from './disk.mjs'
+import { refuseFullDisk, requireSpace } from './disk.mjs'
 import { hashFiles, storedHash } from './hash.mjs'
 import { bin, dataDir, inRoot, root } from './paths.mjs'
 import { runNode } from './run.mjs'
@@ -29,7 +29,7 @@ export async function ensureBuild() {
   rmSync(stamp, { force: true })
   const log = inRoot(dataDir, 'logs/build.log')
   const { code, output } = await runNode([bin('nuxt'), 'build'], { quiet: true, log })
-  if (/ENOSPC|no space left/i.test(output)) throw new Stop('disk', 'The disk is full: the build found no space left.')
+  if (code !== 0) refuseFullDisk('build', output)
   if (code !== 0 || !existsSync(serverEntry)) throw new Stop('build', `nuxt build failed: ${buildReason(output)} (${log})`)
   writeFileSync(stamp, `${hash}\n`)
   say('build', `built in ${duration(Date.now() - began)}`)

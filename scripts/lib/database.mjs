@@ -1,4 +1,5 @@
 import { readdirSync } from 'node:fs'
+import { refuseFullDisk } from './disk.mjs'
 import { inRoot } from './paths.mjs'
 import { lastLine, run, runNode } from './run.mjs'
 import { Stop } from './say.mjs'
@@ -53,12 +54,12 @@ export function compareMigrations(ours, applied) {
 export async function script(name, args, env, { shown = false } = {}) {
   const file = inRoot('scripts', `${name}.ts`)
   const { code, output } = await runNode(['--import', 'jiti/register', file, ...args], { env: { ...process.env, ...env }, quiet: !shown })
+  if (code !== 0) refuseFullDisk(name, output)
   if (code !== 0) throw new Stop(name, `${name} ${args.join(' ')} failed: ${failure(output)}`)
 }
 
 /** The line of a script's output that names its error. */
 export function failure(output) {
-  if (/No space left on device/.test(output)) return 'the disk is full.'
   const lines = output.split('\n').map(line => line.trim()).filter(Boolean)
   return lines.find(line => /^(\w*Error|ERROR|error)\b/.test(line)) ?? lines.at(-1) ?? 'it said nothing'
 }

@@ -9,3 +9,8 @@ export function requireSpace(folder, megabytes) {
   const free = Math.floor(bavail * bsize / 1e6)
   if (free < megabytes) throw new Stop('disk', `The disk is full: ${folder} has ${free} MB free, ${megabytes} MB are needed.`)
 }
+
+/** Stops when a program's words say that it found the disk full. */
+export function refuseFullDisk(about, output) {
+  if (/ENOSPC|no space left/i.test(output)) throw new Stop(about, 'The disk is full: no space left on it.')
+}

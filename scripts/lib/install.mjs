@@ -1,5 +1,5 @@
 import { existsSync, readFileSync, rmSync, writeFileSync } from 'node:fs'
-import { requireSpace } from './disk.mjs'
+import { refuseFullDisk, requireSpace } from './disk.mjs'
 import { hashTexts, storedHash } from './hash.mjs'
 import { bin, dataDir, inRoot, root } from './paths.mjs'
 import { run, runNode } from './run.mjs'
@@ -15,7 +15,6 @@ export function packagesHash(packageJson, packageLock) {
 
 /** What went wrong, from npm's many words. */
 export function npmReason(output) {
-  if (/ENOSPC|no space left/i.test(output)) return 'The disk is full: npm found no space left.'
   const lines = output.split('\n').map(line => line.match(/^npm (?:error|ERR!) (?!code |errno |syscall |A complete log)(.+)/)?.[1])
   return `npm ci failed: ${lines.find(Boolean) ?? 'see the log'}`
 }
@@ -33,6 +32,7 @@ async function install() {
   const { code, output } = npm
     ? await runNode([npm, ...args], { quiet: true, log })
     : await run('npm', args, { quiet: true, log })
+  if (code !== 0) refuseFullDisk('packages', output)
   if (code !== 0) throw new Stop('packages', `${npmReason(output)} (${log})`)
   say('packages', `installed in ${duration(Date.now() - began)}`)
 }
@@ -40,7 +40,8 @@ async function install() {
 /** Has Nuxt write the types and settings under .nuxt that lint, types and tests read. */
 async function prepare() {
   const log = inRoot(dataDir, 'logs/nuxt-prepare.log')
-  const { code } = await runNode([bin('nuxt'), 'prepare'], { quiet: true, log })
+  const { code, output } = await runNode([bin('nuxt'), 'prepare'], { quiet: true, log })
+  if (code !== 0) refuseFullDisk('packages', output)
   if (code !== 0) throw new Stop('packages', `nuxt prepare failed: see ${log}`)
 }
 

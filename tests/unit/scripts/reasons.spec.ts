@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest'
 import { buildReason } from '../../../scripts/lib/build.mjs'
 import { compareMigrations, failure } from '../../../scripts/lib/database.mjs'
+import { refuseFullDisk } from '../../../scripts/lib/disk.mjs'
 import { npmReason } from '../../../scripts/lib/install.mjs'
 import { serverReason } from '../../../scripts/lib/server.mjs'
 
@@ -9,9 +10,18 @@ describe('why npm ci failed', () => {
     const output = 'npm error code E404\nnpm error 404 Not Found - nothing\nnpm error A complete log of this run'
     expect(npmReason(output)).toBe('npm ci failed: 404 Not Found - nothing')
   })
+})
 
-  it('is the full disk where it is that', () => {
-    expect(npmReason('npm error code ENOSPC\nnpm error syscall write')).toBe('The disk is full: npm found no space left.')
+describe('a full disk', () => {
+  it.each([
+    'npm error code ENOSPC\nnpm error syscall write',
+    'error: could not extend file: No space left on device',
+  ])('is named: %s', (output) => {
+    expect(() => refuseFullDisk('build', output)).toThrow('The disk is full')
+  })
+
+  it('is not suspected elsewhere', () => {
+    expect(refuseFullDisk('build', 'Could not resolve x')).toBeUndefined()
   })
 })
 
@@ -24,10 +34,6 @@ describe('why the build failed', () => {
 describe('why a script failed', () => {
   it('is the line of the error, not of its stack', () => {
     expect(failure('/x/migrate.ts:3\n  throw y\nError: no such table\n    at z')).toBe('Error: no such table')
-  })
-
-  it('is the full disk where it is that', () => {
-    expect(failure('error: could not extend file: No space left on device')).toBe('the disk is full.')
   })
 })
 
