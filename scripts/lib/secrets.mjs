@@ -18,6 +18,9 @@ function readOrMake(path) {
 /**
  * The server's secrets, 64 random characters each: those of the environment, else of files under `secrets/` that only
  * their owner can read, made on the first start. Answers `{ env, made }`, env with both by name, made the files written.
+ * @param {string} dataDir
+ * @param {Record<string, string | undefined>} given
+ * @returns {{ env: Record<string, string>, made: string[] }}
  */
 export function openSecrets(dataDir, given = process.env) {
   const folder = join(dataDir, 'secrets')

@@ -1,6 +1,7 @@
 import { ensureBuild } from './build.mjs'
 import { addresses, compareMigrations, inspect, migrationNames, postgres, script } from './database.mjs'
 import { requireSpace } from './disk.mjs'
+import { without } from './env.mjs'
 import { ensurePackages } from './install.mjs'
 import { bin, dataDir } from './paths.mjs'
 import { address, isLoopback, requireFree } from './port.mjs'
@@ -34,10 +35,13 @@ async function migrate(env, applied) {
   await script('migrate', ['up'], env)
 }
 
-/** What an empty database is filled with: 'demo', 'minimal' (one administrator), or nothing. */
-export function firstData({ JAMNUT_DEMO, JAMNUT_ADMIN_EMAIL }) {
-  if (JAMNUT_DEMO !== '0') return 'demo'
-  return JAMNUT_ADMIN_EMAIL ? 'minimal' : undefined
+/**
+ * What an empty database is filled with: 'demo', 'minimal' (one administrator), or nothing.
+ * @param {Record<string, string | undefined>} env
+ */
+export function firstData(env) {
+  if (env.JAMNUT_DEMO !== '0') return 'demo'
+  return env.JAMNUT_ADMIN_EMAIL ? 'minimal' : undefined
 }
 
 async function fill(env) {
@@ -90,7 +94,7 @@ export async function start({ dev }) {
   await requireFree(here)
   say('server', dev ? 'starting for development' : 'starting')
   // The server never sees the owner's address: what it cannot do, nobody can make it do.
-  const { DATABASE_OWNER_URL: _, ...webEnv } = { ...process.env, ...env, NODE_ENV: dev ? 'development' : 'production' }
+  const webEnv = without({ ...process.env, ...env, NODE_ENV: dev ? 'development' : 'production' }, 'DATABASE_OWNER_URL')
   const { child, url } = await serve({
     ...here,
     env: webEnv,

@@ -2,6 +2,7 @@ import { mkdirSync, rmSync } from 'node:fs'
 import { ensureBuild } from './build.mjs'
 import { artifacts, checks, report, vitest } from './checks.mjs'
 import { ensureChromium } from './chromium.mjs'
+import { withoutOurs } from './env.mjs'
 import { ensurePackages } from './install.mjs'
 import { inRoot } from './paths.mjs'
 import { freePort } from './port.mjs'
@@ -18,13 +19,8 @@ const began = Date.now()
 const run = newRun()
 let total = none
 
-/** The environment of all that a run starts: nothing of ours that happens to be set reaches it. */
-export function cleanEnv(env) {
-  const ours = /^(JAMNUT_|NUXT_|NITRO_|DATABASE_|HOST$|PORT$|NODE_ENV$)/
-  return { ...Object.fromEntries(Object.entries(env).filter(([name]) => !ours.test(name))), [mark]: run }
-}
-
-const clean = cleanEnv(process.env)
+// All that a run starts carries its mark, and nothing of ours that happens to be set here.
+const clean = { ...withoutOurs(process.env), [mark]: run }
 
 /** Runs one step under a heading. A step answers its result; one that throws is a failure. */
 async function step(name, work) {
