@@ -24,3 +24,22 @@ export function navigationFor(role: Role): { to: string, label: string }[] {
     .filter(({ roles }) => !roles || roles.includes(role))
     .map(({ to, label }) => ({ to, label }))
 }
+
+const firstScreens: Record<Role, string> = {
+  technician: '/bay',
+  foreman: '/repair-orders',
+  quality_lead: '/wrenches',
+  advisor: '/sign-offs',
+  administrator: '/people',
+}
+
+/** The screen a role begins the day with. */
+export const firstScreenFor = (role: Role): string => firstScreens[role]
+
+/** The sign-in page that leads back to an address of ours. */
+export const signInAddress = (from: string): string => from === '/' ? '/sign-in' : `/sign-in?to=${encodeURIComponent(from)}`
+
+/** Where one goes after sign-in: the address remembered, if it is one of ours, else the first page. */
+export function returnAddress(to: unknown): string {
+  return typeof to === 'string' && /^\/(?![/\\])/.test(to) && !to.startsWith('/sign-in') ? to : '/'
+}
