@@ -1,5 +1,6 @@
 import * as z from 'zod/mini'
 import { patterns } from '../torque/order'
+import { specIssues, type SaidSpec } from '../torque/spec-rules'
 import { jointClasses, revisionStatuses, specKinds } from '../types/words'
 import { can, listOf, longText, moment, pageQuery, personBrief, positiveNumber, quantity, reason, text, torqueUnit, uuid } from './common'
 
@@ -70,15 +71,21 @@ const revisionFields = {
   caution: z.optional(longText),
   source: specSource,
 }
+/** The rules that concern several fields, each issue beside the field it concerns. */
+const takenTogether = z.check<SaidSpec>(({ value, issues }) => {
+  // Each field must be right on its own first.
+  if (issues.length > 0) return
+  issues.push(...specIssues(value).map(issue => ({ code: 'custom' as const, input: value, ...issue })))
+})
 /** What one revision says; the identity of the joint (component, application, applies-to) belongs to the spec. */
-export const specRevisionBody = z.strictObject(revisionFields)
+export const specRevisionBody = z.strictObject(revisionFields).check(takenTogether)
 export const createSpecBody = z.strictObject({
   kind: z._default(z.enum(specKinds), 'joint'),
   component: text(120),
   application: text(200),
   appliesTo: z.optional(appliesTo),
   ...revisionFields,
-})
+}).check(takenTogether)
 export const approveSpecBody = z.strictObject({ governs: z.optional(z.enum(['target', 'printed'])) })
 export const withdrawSpecBody = z.strictObject({ reason })
 
