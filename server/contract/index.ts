@@ -1,7 +1,11 @@
 import * as people from './people'
+import * as repairOrders from './repair-orders'
 import type { RouteContract } from './route'
+import * as signOffs from './sign-offs'
 
 /** Every route of the API. A test holds this list against the files of server/api. */
 export const contracts: readonly RouteContract[] = [
   ...Object.values(people),
+  ...Object.values(repairOrders),
+  ...Object.values(signOffs),
 ]

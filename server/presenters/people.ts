@@ -1,6 +1,6 @@
 import type { Me, UserAnswer } from '#shared/schemas/auth'
 import type { Actor, ReadContext } from '../context'
-import type { User } from '../db/models/User'
+import type { User } from '../db/models/user'
 import * as people from '../policies/people'
 import { canDo, roleMay } from '../policies/policy'
 import type { UserRow } from '../services/people/queries'

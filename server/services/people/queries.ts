@@ -1,7 +1,7 @@
 import type { Me, UserQuery } from '#shared/schemas/auth'
 import type { Role } from '#shared/types/roles'
 import type { ReadContext } from '../../context'
-import { User } from '../../db/models/User'
+import { User } from '../../db/models/user'
 import { Conditions, type Page, page } from '../../db/page'
 import { notFound } from '../../refusal'
 import { PIN_TRIES } from './pin'

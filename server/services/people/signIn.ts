@@ -1,7 +1,7 @@
 import { RateLimiterPostgres, RateLimiterRes } from 'rate-limiter-flexible'
 import type { SignedInUser, SignInBody } from '#shared/schemas/auth'
 import { counters } from '../../db/counters'
-import { User } from '../../db/models/User'
+import { User } from '../../db/models/user'
 import { Refusal } from '../../refusal'
 import { verifyNobody, verifyPassphrase } from './passphrase'
 import { beginSession } from './sessions'

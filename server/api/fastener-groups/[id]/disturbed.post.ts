@@ -1,0 +1,10 @@
+import { disturbGroup as contract } from '../../../contract/repair-orders'
+import { presentGroup } from '../../../presenters/fastener-groups'
+import { disturb } from '../../../services/fastener-groups/marks'
+import { readGroup } from '../../../services/fastener-groups/queries'
+import { defineRoute } from '../../../utils/defineRoute'
+
+export default defineRoute(contract, async (ctx, { params, body }) => {
+  await disturb(ctx, params.id, body.reason)
+  return presentGroup(ctx, await readGroup(ctx, params.id))
+})
