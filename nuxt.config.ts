@@ -55,7 +55,7 @@ export default defineNuxtConfig({
   hooks: {
     // nuxt-auth-utils opens a session endpoint to everybody; ours is /api/auth/me.
     'nitro:config'(config) {
-      config.handlers = config.handlers?.filter(handler => !handler.route?.startsWith('/api/_auth'))
+      config.handlers = config.handlers?.filter(handler => !handler?.route?.startsWith('/api/_auth'))
     },
   },
 

@@ -1,5 +1,6 @@
 import { type EventHandler, defineEventHandler, getQuery, getRouterParams, setResponseStatus } from 'h3'
 import type * as z from 'zod/mini'
+import type { Issue } from '#shared/schemas/errors'
 import { sayIssue } from '#shared/schemas/messages'
 import type { Context, ReadContext } from '../context'
 import type { RouteContract } from '../contract/route'
@@ -33,7 +34,7 @@ export class Reply<Body> {
 function parse(schema: z.ZodMiniType, value: unknown) {
   const result = schema.safeParse(value, { error: sayIssue })
   if (result.success) return result.data
-  throw invalid(result.error.issues.flatMap(issue => issue.code === 'unrecognized_keys'
+  throw invalid(result.error.issues.flatMap((issue): Issue[] => issue.code === 'unrecognized_keys'
     ? issue.keys.map(key => ({ path: [...issue.path, key].join('.'), message: 'This field is not known.', code: issue.code }))
     : [{ path: issue.path.join('.'), message: issue.message, code: issue.code }]))
 }

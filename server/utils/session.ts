@@ -20,7 +20,7 @@ export async function sessionIdOf(event: H3Event): Promise<string | null> {
 }
 
 /** Seals a session id into the cookie. */
-export async function sealSession(event: H3Event, sessionId: string): Promise<void> {
+export async function keepSession(event: H3Event, sessionId: string): Promise<void> {
   await setUserSession(event, { sessionId })
 }
 

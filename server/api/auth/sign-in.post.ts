@@ -3,10 +3,10 @@ import { signIn as contract } from '../../contract/people'
 import { signIn } from '../../services/people/signIn'
 import { clientOf } from '../../utils/client'
 import { defineRoute } from '../../utils/defineRoute'
-import { sealSession } from '../../utils/session'
+import { keepSession } from '../../utils/session'
 
 export default defineEventHandler(event => defineRoute(contract, async (ctx, { body }) => {
   const { user, sessionId } = await signIn(body, clientOf(event), ctx.now)
-  await sealSession(event, sessionId)
+  await keepSession(event, sessionId)
   return { user }
 })(event))

@@ -7,7 +7,7 @@ import type { Actor } from '../../../server/context'
 import { contracts } from '../../../server/contract'
 import gate from '../../../server/middleware/gate'
 import { beginSession } from '../../../server/services/people/sessions'
-import { sealSession } from '../../../server/utils/session'
+import { keepSession } from '../../../server/utils/session'
 
 type Method = 'GET' | 'POST' | 'PUT' | 'PATCH'
 const files = import.meta.glob<{ default: EventHandler }>('../../../server/api/**/*.ts', { eager: true })
@@ -27,7 +27,7 @@ function buildApp() {
   const router = createRouter()
   // Opens a session without a passphrase's slow hash; sign-in itself is tested through its own route.
   router.post('/test/session', defineEventHandler(async (event) => {
-    await sealSession(event, String(event.node.req.headers['x-session-id']))
+    await keepSession(event, String(event.node.req.headers['x-session-id']))
     return { sealed: true }
   }))
   for (const [file, { default: handler }] of Object.entries(files)) {

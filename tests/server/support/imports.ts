@@ -1,5 +1,5 @@
 /** What the server takes from Nitro's auto-imports, for tests that run its routes without a build. */
-export { clearUserSession, getUserSession, setUserSession } from 'nuxt-auth-utils/dist/runtime/server/utils/session.js'
+export { clearUserSession, getUserSession, setUserSession } from '../../../node_modules/nuxt-auth-utils/dist/runtime/server/utils/session.js'
 
 export const useRuntimeConfig = () => ({
   session: {
