@@ -7,8 +7,6 @@ declare module 'h3' {
     /** Whoever is signed in; the gate sets it. */
     actor?: Actor
     shop?: Shop
-    /** Set on a page's response: the one nonce its inline scripts carry. */
-    nonce?: string
   }
 }
 
