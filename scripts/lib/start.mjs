@@ -53,7 +53,7 @@ async function fill(env) {
     say('people', `adding the first administrator, ${process.env.JAMNUT_ADMIN_EMAIL}`)
     await script('seed', ['minimal'], env, { shown: true })
   } else {
-    say('people', 'nobody can sign in yet: JAMNUT_ADMIN_EMAIL=you@example.com npm start adds the first administrator')
+    say('people', 'nobody can sign in yet: JAMNUT_DEMO=0 JAMNUT_ADMIN_EMAIL=you@example.com npm start adds the first one')
   }
 }
 
