@@ -22,10 +22,9 @@ export function useAct<Args extends unknown[], Result>(act: (...args: Args) => P
   async function run(...args: Args): Promise<Result | undefined> {
     if (busy.value) return undefined
     busy.value = true
+    refusal.value = null
     try {
-      const result = await act(...args)
-      refusal.value = null
-      return result
+      return await act(...args)
     } catch (thrown) {
       refusal.value = toApiError(thrown)
       await nextTick()
