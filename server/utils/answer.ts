@@ -1,7 +1,7 @@
 import { type H3Event, setResponseHeader, setResponseStatus } from 'h3'
 import { BaseError, DatabaseError, ForeignKeyConstraintError, UniqueConstraintError } from 'sequelize'
 import type { ErrorAnswer } from '#shared/schemas/errors'
-import { conflict, Refusal } from '../refusal'
+import { conflict, invalid, Refusal } from '../refusal'
 import { logger } from './logger'
 
 const statusNames: Record<number, string> = {
@@ -22,6 +22,10 @@ function fromDatabase(error: BaseError): Refusal | null {
     if (error.parent.code === '40P01' || error.parent.code === '40001') {
       return conflict('busy', 'Somebody else changed this at the same moment. Nothing was saved: try again.')
     }
+    // Character zero, which no text column holds.
+    if (error.parent.code === '22021' || error.parent.code === '22P05') {
+      return invalid([{ path: '', message: 'There is a character in it that cannot be kept.' }])
+    }
   }
   return null
 }
@@ -40,12 +44,14 @@ export function toRefusal(error: unknown, about: Record<string, unknown>): Refus
 /** Answers a refusal in the one shape all errors have. */
 export function answerRefusal(event: H3Event, refusal: Refusal): ErrorAnswer {
   setResponseStatus(event, refusal.status, statusNames[refusal.status])
-  const { retryAfterSeconds } = refusal.detail
+  const { retryAfterSeconds, rows } = refusal.detail
   if (typeof retryAfterSeconds === 'number') setResponseHeader(event, 'Retry-After', retryAfterSeconds)
   return {
     statusCode: refusal.status,
     statusMessage: statusNames[refusal.status] ?? 'Error',
     message: refusal.message,
     data: { code: refusal.code, ...refusal.detail },
+    // A refused import answers its report where a successful one does, too.
+    ...(rows === undefined ? {} : { rows }),
   }
 }

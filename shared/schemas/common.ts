@@ -6,13 +6,15 @@ import { torqueUnits } from '../torque/units'
 export const MAX_TORQUE_VALUE = 1_000_000
 export const MAX_PAGE = 200
 
+/** The database cannot keep the character zero in a text. */
+const storable = z.refine<string>(value => !value.includes('\0'), { error: 'There is a character in it that cannot be kept.' })
 /** A text of 1 to `max` characters, trimmed at both ends. */
-export const text = (max: number) => z.string().check(z.trim(), z.minLength(1), z.maxLength(max))
+export const text = (max: number) => z.string().check(z.trim(), z.minLength(1), z.maxLength(max), storable)
 
 /** A text that may be longer: notes, complaints, reasons. */
 export const longText = text(2000)
 /** Why somebody decided something: a word is not a reason. */
-export const reason = z.string().check(z.trim(), z.minLength(3), z.maxLength(2000))
+export const reason = z.string().check(z.trim(), z.minLength(3), z.maxLength(2000), storable)
 
 /** Any UUID, upper or lower case. */
 export const uuid = z.string().check(

@@ -137,6 +137,8 @@ export const revisionAnswer = z.strictObject({
   governs: z.nullable(z.enum(['target', 'printed'])),
   /** Used where no spec is published; never for a safety joint. */
   shopValue: z.boolean(),
+  /** What a shop value rests on. */
+  reasoning: z.nullable(z.string()),
   createdBy: personBrief,
   createdAt: moment,
   approvedBy: z.nullable(personBrief),

@@ -1,0 +1,10 @@
+import { approveSpec as contract } from '../../../contract/torque-specs'
+import { presentSpec } from '../../../presenters/torque-specs'
+import { readSpec } from '../../../services/torque-specs/queries'
+import { approveSpec } from '../../../services/torque-specs/specs'
+import { defineRoute } from '../../../utils/defineRoute'
+
+export default defineRoute(contract, async (ctx, { params, body }) => {
+  await approveSpec(ctx, params.id, body)
+  return presentSpec(ctx, await readSpec(ctx, params.id))
+})
