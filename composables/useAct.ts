@@ -3,7 +3,7 @@
  * Errors of fields are told by `errorOf(path)`, and the first field marked invalid gets the focus.
  * @param fields paths shown beside a field of the form; issues of others are told by `notice`
  */
-export function useAct<Args extends unknown[], Result>(act: (...args: Args) => Promise<Result>, fields: readonly string[] = []) {
+export function useAct<Args extends unknown[], Result>(act: (...args: Args) => Promise<Result>, fields: MaybeRefOrGetter<readonly string[]> = []) {
   const busy = ref(false)
   const refusal = shallowRef<ApiError | null>(null)
 
@@ -13,7 +13,7 @@ export function useAct<Args extends unknown[], Result>(act: (...args: Args) => P
   const notice = computed(() => {
     if (!refusal.value) return null
     const { issues, message } = refusal.value
-    const others = issues.filter(({ path }) => !fields.includes(path))
+    const others = issues.filter(({ path }) => !toValue(fields).includes(path))
     if (issues.length === 0) return message
     return others.length > 0 ? others.map(issue => issue.message).join(' ') : null
   })
