@@ -31,11 +31,14 @@ export function useSignOffs() {
 /** What the sentence above the table can choose from: every wrench, and whoever signed anything seen so far. */
 export function useSignOffChoices(seen: () => readonly SignOffListItem[] | undefined) {
   const { data: wrenches } = useRead<Page<WrenchAnswer>>('sign-off-wrenches', '/wrenches', { limit: 200 })
-  const names = useState<Record<string, string>>('signers', () => ({}))
+  const earlier = useState<Record<string, string>>('signers', () => ({}))
 
-  watch(seen, (items = []) => {
-    names.value = { ...names.value, ...Object.fromEntries(items.map(({ technician }) => [technician.id, technician.name])) }
-  }, { immediate: true })
+  const names = computed(() => ({
+    ...earlier.value, ...Object.fromEntries((seen() ?? []).map(({ technician }) => [technician.id, technician.name])),
+  }))
+  watch(names, (known) => {
+    earlier.value = known
+  })
 
   return {
     wrenches: computed(() => (wrenches.value?.items ?? []).map(({ id, assetTag }) => ({ value: id, label: assetTag }))),

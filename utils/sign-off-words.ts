@@ -3,7 +3,7 @@ import { formatNumber, formatQuantity } from '#shared/torque/quantity'
 import type { Verdict } from '#shared/torque/verdict'
 import type { ExceptionCode, SecondCheckMethod } from '#shared/types/words'
 import type { BoltState } from './bolt-layout'
-import { formatCount } from './format'
+import { formatCount, formatPercent } from './format'
 
 /** What was not as it should have been, in words. */
 export const exceptionWords: Record<ExceptionCode, string> = {
@@ -83,4 +83,11 @@ export function wasRepeated(reading: AnsweredReading, readings: readonly Answere
 export function enteredWords({ value, unit }: Pick<AnsweredReading, 'value' | 'unit'>): string {
   if (value === null || unit === null) return 'snug'
   return unit === 'deg' ? `${formatNumber(value)}°` : formatQuantity({ value, unit })
+}
+
+/** A probability as the record states it; nothing is ever certain, so the ends are said as bounds. Null stays null. */
+export function probabilityFigure(probability: number | null): string | null {
+  if (probability === null) return null
+  if (probability > 0.999) return '> 99.9 %'
+  return probability < 0.001 ? '< 0.1 %' : formatPercent(probability)
 }
