@@ -27,10 +27,10 @@ export const approveSpec = contract({
   params: idParams, body: approveSpecBody, answer: specAnswer, refuses: [409, 422],
 })
 export const withdrawSpec = contract({
-  method: 'POST', path: '/torque-specs/:id/withdraw', summary: 'Withdraw the newest approved revision', policy: specs.withdrawSpec,
-  params: idParams, body: withdrawSpecBody, answer: specAnswer, refuses: [409],
+  method: 'POST', path: '/torque-specs/:id/withdraw', summary: 'Withdraw the newest approved revision',
+  policy: specs.withdrawSpec, params: idParams, body: withdrawSpecBody, answer: specAnswer, refuses: [409],
 })
 export const importSpecs = contract({
-  method: 'POST', path: '/torque-specs/import', summary: 'Draft specs from a CSV file, row by row', policy: specs.importSpecs,
-  query: importQuery, accepts: 'text/csv', maxBytes: 5_000_000, answer: importReport, made: true, refuses: [422],
+  method: 'POST', path: '/torque-specs/import', summary: 'Draft specs from a CSV file, row by row',
+  policy: specs.importSpecs, query: importQuery, accepts: 'text/csv', maxBytes: 5_000_000, answer: importReport, made: true, refuses: [422],
 })

@@ -9,14 +9,14 @@ export const convertTorque = contract({
   body: convertBody, answer: convertAnswer,
 })
 export const checkTorque = contract({
-  method: 'POST', path: '/torque/check', summary: 'Whether a torque lies in a band, and how surely', policy: calculate, transaction: 'none',
-  body: checkBody, answer: checkAnswer,
+  method: 'POST', path: '/torque/check', summary: 'Whether a torque lies in a band, and how surely',
+  policy: calculate, transaction: 'none', body: checkBody, answer: checkAnswer,
 })
 export const wrenchSetting = contract({
-  method: 'POST', path: '/torque/setting', summary: 'What to set on the wrench, with adapter and multiplier', policy: calculate,
-  transaction: 'none', body: settingBody, answer: settingAnswer,
+  method: 'POST', path: '/torque/setting', summary: 'What to set on the wrench, with adapter and multiplier',
+  policy: calculate, transaction: 'none', body: settingBody, answer: settingAnswer,
 })
 export const tighteningOrder = contract({
-  method: 'POST', path: '/torque/order', summary: 'The order in which to tighten a pattern of bolts', policy: calculate, transaction: 'none',
-  body: orderBody, answer: orderAnswer,
+  method: 'POST', path: '/torque/order', summary: 'The order in which to tighten a pattern of bolts',
+  policy: calculate, transaction: 'none', body: orderBody, answer: orderAnswer,
 })

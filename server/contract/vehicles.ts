@@ -1,5 +1,7 @@
 import { idParams } from '#shared/schemas/common'
-import { createVehicleBody, updateVehicleBody, vehicleAnswer, vehicleListAnswer, vehicleQuery } from '#shared/schemas/vehicles'
+import {
+  createVehicleBody, updateVehicleBody, vehicleAnswer, vehicleListAnswer, vehicleQuery,
+} from '#shared/schemas/vehicles'
 import * as vehicles from '../policies/vehicles'
 import { contract } from './route'
 
@@ -12,7 +14,8 @@ export const createVehicle = contract({
   body: createVehicleBody, answer: vehicleAnswer, made: true, refuses: [409, 422],
 })
 export const readVehicle = contract({
-  method: 'GET', path: '/vehicles/:id', summary: 'A vehicle', policy: vehicles.readVehicles, params: idParams, answer: vehicleAnswer,
+  method: 'GET', path: '/vehicles/:id', summary: 'A vehicle', policy: vehicles.readVehicles,
+  params: idParams, answer: vehicleAnswer,
 })
 export const updateVehicle = contract({
   method: 'PATCH', path: '/vehicles/:id', summary: 'Correct or complete a vehicle', policy: vehicles.updateVehicle,

@@ -10,7 +10,7 @@ export const withdrawSpec = policy('torque_specs.withdraw', decides)
 export const importSpecs = policy('torque_specs.import', decides)
 
 /** One's own draft only where the shop's rule allows it. */
-export const approveSpec = policy<{ createdBy: string, approveOwnDraft: boolean }>('torque_specs.approve', decides, (actor, draft) =>
-  draft.createdBy === actor.id && !draft.approveOwnDraft
+export const approveSpec = policy<{ createdBy: string, approveOwnDraft: boolean }>('torque_specs.approve', decides,
+  (actor, draft) => draft.createdBy === actor.id && !draft.approveOwnDraft
     ? no('same_person', 'You made this draft: somebody else has to approve it.')
     : yes)

@@ -3,7 +3,7 @@ import { stagesOf } from '#shared/torque/stages'
 import { toNm, type Quantity } from '#shared/torque/units'
 import type { ReadContext } from '../context'
 import type { TorqueSpecRevision } from '../db/models/torque-spec-revision'
-import { canDo, roleMay } from '../policies/policy'
+import { decide, roleMay } from '../policies/policy'
 import * as policies from '../policies/torque-specs'
 import type { SpecRecord } from '../services/torque-specs/queries'
 import { printedOf, targetOf } from '../services/torque-specs/values'
@@ -39,7 +39,12 @@ export function presentRevision(revision: TorqueSpecRevision): SpecRevisionAnswe
     oneTimeUse: revision.oneTimeUse,
     retorque: revision.retorque,
     caution: revision.caution,
-    source: { title: revision.sourceTitle, section: revision.sourceSection, page: revision.sourcePage, date: revision.sourceDate },
+    source: {
+      title: revision.sourceTitle,
+      section: revision.sourceSection,
+      page: revision.sourcePage,
+      date: revision.sourceDate,
+    },
     limits,
     flags: revision.flags,
     governs: revision.governs,
@@ -55,17 +60,20 @@ export function presentRevision(revision: TorqueSpecRevision): SpecRevisionAnswe
 
 function mayDo({ actor, shop }: ReadContext, revisions: readonly TorqueSpecRevision[]): Record<string, boolean> {
   const [newest] = revisions
+  const { approveOwnDraft } = shop.rules
+  const isApproved = revisions.some(revision => revision.status === 'approved')
   return {
     revise: roleMay(actor.role, policies.reviseSpec).allowed,
     approve: newest?.status === 'draft'
-      && canDo(actor, { createdBy: newest.createdBy, approveOwnDraft: shop.rules.approveOwnDraft }, { approve: policies.approveSpec }).approve === true,
-    withdraw: revisions.some(revision => revision.status === 'approved') && roleMay(actor.role, policies.withdrawSpec).allowed,
+      && decide(actor, policies.approveSpec, { createdBy: newest.createdBy, approveOwnDraft }).allowed,
+    withdraw: isApproved && roleMay(actor.role, policies.withdrawSpec).allowed,
   }
 }
 
 /** A spec with one revision: the newest approved, else the newest of all, unless another is named by its id. */
 export function presentSpec(ctx: ReadContext, { spec, revisions }: SpecRecord, revisionId?: string): SpecAnswer {
-  const revision = revisions.find(item => revisionId === undefined ? item.status === 'approved' : item.id === revisionId) ?? revisions[0]
+  const isShown = (item: TorqueSpecRevision) => revisionId === undefined ? item.status === 'approved' : item.id === revisionId
+  const revision = revisions.find(isShown) ?? revisions[0]
   if (!revision) throw new Error('A spec without a revision.')
   return {
     id: spec.id,

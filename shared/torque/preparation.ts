@@ -27,7 +27,8 @@ const codeOf: Record<ThreadCondition, PreparationCode> = {
 }
 
 // "Without oil" says dry, and "dry, no thread locker" does not say thread locker.
-const denied = /\b(?:no|not|non|without|never|free (?:of|from))\b[\s-]+(?:any\s+)?[a-z-]+(?:\s+(?:locker|seize|compound))?|\boil[\s-]free\b/g
+const denial = '\\b(?:no|not|non|without|never|free (?:of|from))\\b[\\s-]+(?:any\\s+)?'
+const denied = new RegExp(`${denial}[a-z-]+(?:\\s+(?:locker|seize|compound))?|\\boil[\\s-]free\\b`, 'g')
 const spellings: readonly (readonly [RegExp, ThreadCondition])[] = [
   [/thread[\s-]*lock|locking (?:compound|fluid|adhesive)/, 'thread_locker'],
   [/anti[\s-]*seiz/, 'anti_seize'],

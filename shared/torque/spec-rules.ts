@@ -73,7 +73,8 @@ function limitsIssues({ lower, upper }: { lower: Quantity, upper: Quantity }, ta
 function positionIssues({ boltCount, pattern, places = [], order }: SaidSpec): RuleIssue[] {
   const count = boltCount ?? order?.length ?? 0
   const numbers = places.map(place => place.position)
-  const drawn = new Set(places.filter(place => place.x !== undefined && place.y !== undefined).map(place => place.position))
+  const placed = places.filter(place => place.x !== undefined && place.y !== undefined)
+  const drawn = new Set(placed.map(place => place.position))
   return [
     ...(order && !isPermutation(order, count)
       ? issue(`Name each position from 1 to ${count} once.`, 'order')
@@ -83,8 +84,8 @@ function positionIssues({ boltCount, pattern, places = [], order }: SaidSpec): R
       : []),
     ...numbers.flatMap((position, index) => {
       if (numbers.indexOf(position) !== index) return issue('This position is drawn already.', 'places', index, 'position')
-      if (boltCount !== undefined && position > boltCount) return issue(`There are only ${boltCount} bolts.`, 'places', index, 'position')
-      return []
+      const isThere = boltCount === undefined || position <= boltCount
+      return isThere ? [] : issue(`There are only ${boltCount} bolts.`, 'places', index, 'position')
     }),
     ...(pattern === 'free' && boltCount === undefined ? issue('Say how many bolts are drawn.', 'boltCount') : []),
     ...(pattern === 'free' && boltCount !== undefined && drawn.size < boltCount

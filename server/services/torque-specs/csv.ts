@@ -30,7 +30,8 @@ function headingIssues(heading: readonly string[]): CsvIssue[] {
   const has = (...columns: ImportColumn[]) => columns.every(column => heading.includes(column))
   return [
     ...heading.flatMap((name, index) => {
-      if (!isColumn(name)) return [{ path: name, message: name === '' ? `Column ${index + 1} has no name.` : `The column ${name.slice(0, 60)} is not known.` }]
+      if (name === '') return [{ path: name, message: `Column ${index + 1} has no name.` }]
+      if (!isColumn(name)) return [{ path: name, message: `The column ${name.slice(0, 60)} is not known.` }]
       return heading.indexOf(name) === index ? [] : [{ path: name, message: `The column ${name} is there twice.` }]
     }),
     ...needed.filter(column => !has(column)).map(column => ({ path: column, message: `The column ${column} is missing.` })),
@@ -47,7 +48,9 @@ function rowOf(heading: readonly string[], cells: readonly string[], line: numbe
     ...(cells.length === heading.length
       ? []
       : [{ path: '', message: `There are ${cells.length} cells, but ${heading.length} columns.` }]),
-    ...(cells.some(cell => cell.includes('\uFFFD')) ? [{ path: '', message: 'A letter cannot be read. Save the file as UTF-8.' }] : []),
+    ...(cells.some(cell => cell.includes('\uFFFD'))
+      ? [{ path: '', message: 'A letter cannot be read. Save the file as UTF-8.' }]
+      : []),
   ]
   return { line, cells: named, issues }
 }
@@ -79,7 +82,8 @@ export function readCsv(text: string): CsvFile {
     })
   } catch (error) {
     if (!(error instanceof CsvError)) throw error
-    return wholeFile(Number(error.lines) || 1, 'The file cannot be read from here on: a quotation mark is out of place, or is not closed.')
+    const message = 'The file cannot be read from here on: a quotation mark is out of place, or is not closed.'
+    return wholeFile(Number(error.lines) || 1, message)
   }
   const [heading, ...rows] = records
   if (!heading) return wholeFile(1, 'The file is empty.')

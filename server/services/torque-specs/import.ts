@@ -57,7 +57,9 @@ function judge(ctx: Context, rows: readonly CsvRow[], there: ReadonlySet<string 
 }
 
 async function write(ctx: Context, drafts: readonly Draft[]): Promise<void> {
-  await appendAllToLog(ctx, drafts.map(({ spec, content }) => ({ kind: 'torque_specs.import', subject: spec.id, content })))
+  await appendAllToLog(ctx, drafts.map(({ spec, content }) => {
+    return { kind: 'torque_specs.import', subject: spec.id, content }
+  }))
   for (let start = 0; start < drafts.length; start += rowsAtOnce) {
     const some = drafts.slice(start, start + rowsAtOnce)
     await TorqueSpec.bulkCreate(some.map(draft => draft.spec), { transaction: ctx.tx, returning: false })
@@ -84,7 +86,9 @@ function refusal(rows: ReportRow[], message: string): Refusal {
  * @throws Refusal 422 `import_refused` with the report of every row; rows that are well in themselves have no id then,
  * for nothing was written
  */
-export async function importSpecs(ctx: Context, text: string, { partial }: { partial: boolean }): Promise<ImportReport> {
+export async function importSpecs(
+  ctx: Context, text: string, { partial }: { partial: boolean },
+): Promise<ImportReport> {
   authorize(ctx.actor, policies.importSpecs, undefined)
   const file = readCsv(text)
   if (!file.ok) {
@@ -95,7 +99,8 @@ export async function importSpecs(ctx: Context, text: string, { partial }: { par
   const drafts = outcomes.flatMap(({ draft }) => draft ? [draft] : [])
   const refusedCount = outcomes.length - drafts.length
   if (drafts.length === 0 || (refusedCount > 0 && !partial)) {
-    throw refusal(outcomes.map(outcome => reportOf(outcome, false)), `${refusedCount} of ${outcomes.length} rows are refused. Nothing was imported.`)
+    const message = `${refusedCount} of ${outcomes.length} rows are refused. Nothing was imported.`
+    throw refusal(outcomes.map(outcome => reportOf(outcome, false)), message)
   }
   await write(ctx, drafts)
   return { rows: outcomes.map(outcome => reportOf(outcome, true)) }

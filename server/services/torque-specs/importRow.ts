@@ -72,14 +72,19 @@ class Cells {
 }
 
 /** A number with its unit, where there is a number. */
-const quantity = (value: number | undefined, unit: string | undefined) => value === undefined ? undefined : { value, unit }
+const quantity = (value: number | undefined, unit: string | undefined) =>
+  value === undefined ? undefined : { value, unit }
 
 function toleranceOf(cells: Cells) {
-  const [lower, upper, value] = [cells.number('lower_value'), cells.number('upper_value'), cells.number('tolerance_value')]
+  const lower = cells.number('lower_value')
+  const upper = cells.number('upper_value')
+  const value = cells.number('tolerance_value')
   const unit = cells.text('target_unit')
   const hasLimits = lower !== undefined || upper !== undefined
   const kind = cells.text('tolerance_kind')?.toLowerCase() ?? (hasLimits ? 'limits' : undefined)
-  if (hasLimits && kind !== 'limits') return cells.wrong('tolerance_kind', 'Lower and upper limit are given: write limits here, or leave it empty.')
+  if (hasLimits && kind !== 'limits') {
+    return cells.wrong('tolerance_kind', 'Lower and upper limit are given: write limits here, or leave it empty.')
+  }
   if (value !== undefined && kind !== 'percent' && kind !== 'absolute') {
     return cells.wrong('tolerance_kind', 'A tolerance is given: write percent or absolute here.')
   }
@@ -109,7 +114,11 @@ function bodyOf(cells: Cells) {
     jointClass: cells.text('joint_class'),
     secondCheckRequired: cells.boolean('second_check_required'),
     oneTimeUse: cells.boolean('one_time_use'),
-    source: { title: cells.text('source_title'), section: cells.text('source_section'), page: cells.text('source_page') },
+    source: {
+      title: cells.text('source_title'),
+      section: cells.text('source_section'),
+      page: cells.text('source_page'),
+    },
   }
 }
 
@@ -125,6 +134,7 @@ export function judgeRow(row: CsvRow): JudgedRow {
     return { path: columnOf[field] ?? field, message }
   })
   // What could not be read is missing to the schema, too: once is enough.
-  const others = issues.filter(({ path }, index) => !unread.has(path) && issues.findIndex(issue => issue.path === path) === index)
+  const others = issues.filter(({ path }, index) =>
+    !unread.has(path) && issues.findIndex(issue => issue.path === path) === index)
   return { ok: false, issues: [...cells.issues, ...others] }
 }

@@ -21,7 +21,8 @@ const undecided = { approvedBy: null, approvedAt: null, withdrawnBy: null, withd
 
 function refuseSafetyShopValue(shopValue: boolean, { jointClass }: Pick<SpecRevisionBody, 'jointClass'>): void {
   if (shopValue && jointClass === 'safety') {
-    throw refused('safety_joint', 'A safety joint needs a published spec: no shop value may stand in for it.', 'jointClass')
+    const message = 'A safety joint needs a published spec: no shop value may stand in for it.'
+    throw refused('safety_joint', message, 'jointClass')
   }
 }
 
@@ -31,7 +32,8 @@ export function draftOf(ctx: Pick<Context, 'shop' | 'actor' | 'now'>, input: New
   refuseSpecIssues(input)
   refuseSafetyShopValue(shopValue, body)
   const identity = { kind, component, application, appliesTo: appliesTo ?? null }
-  const said = { ...revisionValues(body, kind, ctx.shop.rules.defaultTolerancePercent), shopValue, reasoning: reasoning ?? null }
+  const values = revisionValues(body, kind, ctx.shop.rules.defaultTolerancePercent)
+  const said = { ...values, shopValue, reasoning: reasoning ?? null }
   const id = uuidv7(ctx.now.getTime())
   const revisionId = uuidv7(ctx.now.getTime())
   return {
@@ -44,7 +46,7 @@ export function draftOf(ctx: Pick<Context, 'shop' | 'actor' | 'now'>, input: New
   }
 }
 
-/** Drafts a spec, whoever makes it: approving is a step of its own. @throws Refusal 400, 422 `safety_joint` for a shop value */
+/** Drafts a spec, whoever makes it: approving is a step of its own. @throws Refusal 400, 422 `safety_joint` */
 export async function createSpec(ctx: Context, input: NewSpec): Promise<SpecWithRevision> {
   authorize(ctx.actor, policies.createSpec, undefined)
   const draft = draftOf(ctx, input)
@@ -56,7 +58,9 @@ export async function createSpec(ctx: Context, input: NewSpec): Promise<SpecWith
 
 /** Locks a spec, so that its revisions are decided one after another; newest revision first. @throws Refusal 404 */
 async function lockSpec(ctx: Context, id: string): Promise<{ spec: TorqueSpec, revisions: TorqueSpecRevision[] }> {
-  const spec = await TorqueSpec.findOne({ where: { shopId: ctx.shop.id, id }, lock: ctx.tx.LOCK.UPDATE, transaction: ctx.tx })
+  const spec = await TorqueSpec.findOne({
+    where: { shopId: ctx.shop.id, id }, lock: ctx.tx.LOCK.UPDATE, transaction: ctx.tx,
+  })
   if (!spec) throw notFound('This torque spec')
   const revisions = await TorqueSpecRevision.findAll({
     where: { shopId: ctx.shop.id, specId: id }, order: [['number', 'DESC']], transaction: ctx.tx,
@@ -64,7 +68,7 @@ async function lockSpec(ctx: Context, id: string): Promise<{ spec: TorqueSpec, r
   return { spec, revisions }
 }
 
-/** Drafts a new revision. What was approved stays approved, and means what it meant. @throws Refusal 404, 422 `safety_joint` */
+/** Drafts a new revision. What was approved stays approved, and means what it meant. @throws as createSpec, 404 */
 export async function reviseSpec(ctx: Context, id: string, body: SpecRevisionBody): Promise<SpecWithRevision> {
   const { spec, revisions: [newest] } = await lockSpec(ctx, id)
   if (!newest) throw new Error('A spec without a revision.')
@@ -79,7 +83,8 @@ export async function reviseSpec(ctx: Context, id: string, body: SpecRevisionBod
   }
   const revisionId = uuidv7(ctx.now.getTime())
   const number = newest.number + 1
-  await appendToLog(ctx, { kind: 'torque_specs.revise', subject: id, content: { revision: { id: revisionId, number, ...said } } })
+  const content = { revision: { id: revisionId, number, ...said } }
+  await appendToLog(ctx, { kind: 'torque_specs.revise', subject: id, content })
   const revision = await TorqueSpecRevision.create({
     id: revisionId, shopId: ctx.shop.id, specId: id, number, status: 'draft', ...said,
     createdBy: ctx.actor.id, createdAt: ctx.now, ...undecided,
@@ -91,30 +96,40 @@ export async function reviseSpec(ctx: Context, id: string, body: SpecRevisionBod
  * Makes the newest draft usable. A draft whose two printed units disagree needs a person to say which one governs.
  * @throws Refusal 404, 403 `same_person`, 409 `already_decided`, 422 `dual_unit_mismatch`, 422 `governs`
  */
-export async function approveSpec(ctx: Context, id: string, { governs }: { governs?: 'target' | 'printed' | undefined } = {}): Promise<SpecWithRevision> {
+export async function approveSpec(
+  ctx: Context, id: string, { governs }: { governs?: 'target' | 'printed' | undefined } = {},
+): Promise<SpecWithRevision> {
   const { spec, revisions: [draft] } = await lockSpec(ctx, id)
   // An older draft is overtaken by whatever came after it.
-  if (draft?.status !== 'draft') throw conflict('already_decided', 'There is no draft to approve: somebody has decided it already.')
-  authorize(ctx.actor, policies.approveSpec, { createdBy: draft.createdBy, approveOwnDraft: ctx.shop.rules.approveOwnDraft })
+  if (draft?.status !== 'draft') {
+    throw conflict('already_decided', 'There is no draft to approve: somebody has decided it already.')
+  }
+  const { approveOwnDraft } = ctx.shop.rules
+  authorize(ctx.actor, policies.approveSpec, { createdBy: draft.createdBy, approveOwnDraft })
   if (draft.flags.length > 0 && !governs) {
-    throw refused('dual_unit_mismatch', `${draft.flags.map(flag => flag.message).join(' ')} Say which one governs.`, 'governs')
+    const message = `${draft.flags.map(flag => flag.message).join(' ')} Say which one governs.`
+    throw refused('dual_unit_mismatch', message, 'governs')
   }
   const values = governs === 'printed' ? printedValues(draft, ctx.shop.rules.defaultTolerancePercent) : {}
   const revision = await draft.update({
     ...values, governs: governs ?? null, status: 'approved', approvedBy: ctx.actor.id, approvedAt: ctx.now,
   }, { transaction: ctx.tx })
+  const { number, flags, stages, targetNm, lowerNm, upperNm } = revision
   await appendToLog(ctx, {
     kind: 'torque_specs.approve',
     subject: id,
     content: {
-      revision: { id: draft.id, number: draft.number, governs: revision.governs, flags: revision.flags, stages: revision.stages },
-      limits: { targetNm: revision.targetNm, lowerNm: revision.lowerNm, upperNm: revision.upperNm },
+      revision: { id: revision.id, number, governs: revision.governs, flags, stages },
+      limits: { targetNm, lowerNm, upperNm },
     },
   })
   return { spec, revision }
 }
 
-/** Takes the newest approved revision out of use; what was signed by it stays signed. @throws Refusal 404, 409 `already_decided` */
+/**
+ * Takes the newest approved revision out of use; what was signed by it stays signed.
+ * @throws Refusal 404, 409 `already_decided`
+ */
 export async function withdrawSpec(ctx: Context, id: string, reason: string): Promise<SpecWithRevision> {
   const { spec, revisions } = await lockSpec(ctx, id)
   authorize(ctx.actor, policies.withdrawSpec, undefined)

@@ -19,7 +19,8 @@ function flagOf(what: string, first: Quantity | undefined, second: Quantity | un
   const { explained, diffNm, limitBothNm, swapped } = checkDualUnits({ first, second })
   if (explained) return []
   const hint = swapped ? ' The columns look swapped.' : ''
-  const message = `${what}: ${formatQuantity(first)} and ${formatQuantity(second)} differ by more than rounding explains.${hint}`
+  const pair = `${formatQuantity(first)} and ${formatQuantity(second)}`
+  const message = `${what}: ${pair} differ by more than rounding explains.${hint}`
   return [{ code: 'dual_unit_mismatch', message, diffNm, limitNm: limitBothNm, swapped }]
 }
 
@@ -85,9 +86,11 @@ export function printedValues(draft: TorqueSpecRevision, shopDefaultPercent: num
   const target = targetOf(draft)
   const printed = printedOf(draft)
   if (!printed && !draft.printedLimits) throw refused('governs', 'Nothing is printed in a second unit.', 'governs')
-  const stages = draft.stages?.map(stage => stage.kind === 'torque' && printed && target && sameQuantity(stage.target, target)
-    ? { ...stage, target: printed }
-    : stage) ?? null
+  // The stage that ends on the spec's own target ends on the governing value.
+  const stages = draft.stages?.map((stage) => {
+    const isTarget = stage.kind === 'torque' && target && sameQuantity(stage.target, target)
+    return isTarget && printed ? { ...stage, target: printed } : stage
+  }) ?? null
   const tolerance = draft.printedLimits ? { kind: 'limits' as const, ...draft.printedLimits } : draft.tolerance
   const said = { target: printed, tolerance, stages: stages ?? undefined }
   const [wrong] = bandIssues(said)

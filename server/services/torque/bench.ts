@@ -31,7 +31,10 @@ export function check(ctx: Pick<ReadContext, 'shop'>, body: CheckBody): CheckAns
   }
 }
 
-/** What to set on the wrench so that the fastener gets the target. @throws Refusal 400 for an adapter that turns the torque round */
+/**
+ * What to set on the wrench so that the fastener gets the target.
+ * @throws Refusal 400 for an adapter that turns the torque round
+ */
 export function setting({ target, adapter, multiplierRatio, graduation }: SettingBody): WrenchSetting {
   for (const [path, quantity] of Object.entries({ target, graduation })) {
     if (quantity && toNm(quantity) < smallestNm) throw invalid([{ path, message: 'That is too small for a torque.' }])
@@ -47,6 +50,8 @@ export function setting({ target, adapter, multiplierRatio, graduation }: Settin
 
 /** The product's own tightening order. @throws Refusal 400 for two rows of an odd count */
 export function order({ pattern, count }: { pattern: Pattern, count: number }): { order: number[] } {
-  if (pattern === 'two_rows' && count % 2 === 1) throw invalid([{ path: 'count', message: 'Two rows need an even number of bolts.' }])
+  if (pattern === 'two_rows' && count % 2 === 1) {
+    throw invalid([{ path: 'count', message: 'Two rows need an even number of bolts.' }])
+  }
   return { order: orderFor(pattern, count) }
 }

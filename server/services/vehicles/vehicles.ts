@@ -35,14 +35,18 @@ export async function createVehicle(ctx: Context, body: CreateVehicleBody): Prom
     engine: body.engine ?? null,
     odometer: body.odometer ?? null,
   }
-  const vehicle = await Vehicle.create({ id, shopId: ctx.shop.id, ...record, createdAt: ctx.now }, { transaction: ctx.tx })
+  const vehicle = await Vehicle.create({ id, shopId: ctx.shop.id, ...record, createdAt: ctx.now }, {
+    transaction: ctx.tx,
+  })
   await appendToLog(ctx, { kind: 'vehicles.create', subject: id, content: record })
   return vehicle
 }
 
 /** Corrects or completes a vehicle. @throws Refusal 404, 422 `vin_check_digit`; 409 as createVehicle */
 export async function updateVehicle(ctx: Context, id: string, body: UpdateVehicleBody): Promise<Vehicle> {
-  const vehicle = await Vehicle.findOne({ where: { shopId: ctx.shop.id, id }, lock: ctx.tx.LOCK.UPDATE, transaction: ctx.tx })
+  const vehicle = await Vehicle.findOne({
+    where: { shopId: ctx.shop.id, id }, lock: ctx.tx.LOCK.UPDATE, transaction: ctx.tx,
+  })
   if (!vehicle) throw notFound('This vehicle')
   authorize(ctx.actor, policies.updateVehicle, undefined)
   const vin = body.vin ?? vehicle.vin
