@@ -43,3 +43,8 @@ export const signInAddress = (from: string): string => from === '/' ? '/sign-in'
 export function returnAddress(to: unknown): string {
   return typeof to === 'string' && /^\/(?![/\\])/.test(to) && !to.startsWith('/sign-in') ? to : '/'
 }
+
+/** What an address of ours is called, such as "Sign-offs" for one of them; null where it has no name. */
+export function nameOfAddress(address: string): string | null {
+  return destinations.find(({ to }) => address === to || /^[/?#]/.test(address.slice(to.length)) && address.startsWith(to))?.label ?? null
+}
