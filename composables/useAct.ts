@@ -1,6 +1,7 @@
 /**
  * One act of a person that the server may refuse: `run` does it, `busy` while it runs, `refusal` is why it was refused.
- * Errors of fields are told by `errorOf(path)`, and the first field marked invalid gets the focus.
+ * Errors of fields are told by `errorOf(path)`, and the first field marked invalid (`aria-invalid`; a group of radio
+ * buttons within `data-invalid`) gets the focus.
  * @param fields paths shown beside a field of the form; issues of others are told by `notice`
  */
 export function useAct<Args extends unknown[], Result>(act: (...args: Args) => Promise<Result>, fields: MaybeRefOrGetter<readonly string[]> = []) {
@@ -28,7 +29,7 @@ export function useAct<Args extends unknown[], Result>(act: (...args: Args) => P
     } catch (thrown) {
       refusal.value = toApiError(thrown)
       await nextTick()
-      document.querySelector<HTMLElement>('[aria-invalid="true"]')?.focus()
+      focusFirstInvalid()
       return undefined
     } finally {
       busy.value = false
@@ -40,4 +41,10 @@ export function useAct<Args extends unknown[], Result>(act: (...args: Args) => P
   }
 
   return { busy, refusal, notice, errorOf, run, reset }
+}
+
+/** A dialog that is open covers what lies behind it. */
+function focusFirstInvalid() {
+  const root = [...document.querySelectorAll('dialog[open]')].at(-1) ?? document
+  root.querySelector<HTMLElement>('[aria-invalid="true"], [data-invalid] input')?.focus()
 }

@@ -12,22 +12,26 @@ export function useSecondChecks() {
   return { ...state, list }
 }
 
-/** One of them, by its sign-off; null when it does not wait any longer. */
+/**
+ * One of them, by its sign-off, with the wrenches for it, fit ones first. `waiting` is null when it does not wait any
+ * longer.
+ */
 export function useSecondCheck(signOffId: string) {
-  const { data, ...read } = useRead<{ items: SecondCheckWaiting[] }>('second-checks-all', '/second-checks', { state: 'waiting', limit: 200 })
-  return { ...read, waiting: computed(() => data.value?.items.find(item => item.signOff.id === signOffId) ?? null) }
-}
-
-/** Wrenches for a joint, fit ones first, each unfit one with its reasons. */
-export function useFitWrenches(fastenerGroupId: () => string | undefined) {
   const $api = useApi()
-  const { data, status, error, refresh } = useAsyncData('second-check-wrenches', async () => {
-    const group = fastenerGroupId()
-    if (!group) return []
-    const { items } = await $api<{ items: WrenchAnswer[] }>('/wrenches', { query: { fitFor: group, limit: 200 } })
-    return items.toSorted((a, b) => Number(b.fit ?? false) - Number(a.fit ?? false))
-  }, { watch: [fastenerGroupId] })
-  return { wrenches: computed(() => data.value ?? []), status, error, refresh }
+  const { data, status, error, refresh } = useAsyncData(`second-check:${signOffId}`, async () => {
+    const { items } = await $api<{ items: SecondCheckWaiting[] }>('/second-checks', { query: { state: 'waiting', limit: 200 } })
+    const waiting = items.find(item => item.signOff.id === signOffId) ?? null
+    if (!waiting?.can.check) return { waiting, wrenches: [] }
+    const crib = await $api<{ items: WrenchAnswer[] }>('/wrenches', { query: { fitFor: waiting.fastenerGroup.id, limit: 200 } })
+    return { waiting, wrenches: crib.items.toSorted((a, b) => Number(b.fit ?? false) - Number(a.fit ?? false)) }
+  })
+  return {
+    waiting: computed(() => data.value?.waiting ?? null),
+    wrenches: computed(() => data.value?.wrenches ?? []),
+    status,
+    error: computed(() => error.value ? toApiError(error.value) : null),
+    refresh,
+  }
 }
 
 /** Signing a second check: exactly once, also when the answer gets lost and it is sent again. */

@@ -46,5 +46,5 @@ export function returnAddress(to: unknown): string {
 
 /** What an address of ours is called, such as "Sign-offs" for one of them; null where it has no name. */
 export function nameOfAddress(address: string): string | null {
-  return destinations.find(({ to }) => address === to || /^[/?#]/.test(address.slice(to.length)) && address.startsWith(to))?.label ?? null
+  return destinations.find(({ to }) => address.startsWith(to) && /^([/?#]|$)/.test(address.slice(to.length)))?.label ?? null
 }
