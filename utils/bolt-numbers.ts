@@ -25,7 +25,7 @@ export function readPositions(text: string, count: number | null, pattern: Patte
 }
 
 /** A printed tightening order, which must name every bolt once. */
-export function readOrder(text: string, count: number | null, pattern: Pattern | ''): ReadPositions {
+export function readPrintedOrder(text: string, count: number | null, pattern: Pattern | ''): ReadPositions {
   const read = readPositions(text, count, pattern)
   if (!read.ok || read.positions.length === 0) return read
   if (count === null) return { ok: false, message: 'Say how many bolts there are, then the order can be checked.' }

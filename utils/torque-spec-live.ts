@@ -1,8 +1,11 @@
+import type { SpecRevisionAnswer } from '#shared/schemas/torque-specs'
+import { formatQuantity } from '#shared/torque/quantity'
 import { bandIssues, specLimits } from '#shared/torque/spec-rules'
 import type { StageSpec } from '#shared/torque/stages'
 import type { Limits, Tolerance } from '#shared/torque/tolerance'
+import type { Quantity } from '#shared/torque/units'
 import { quantityOf, type SpecForm } from './torque-spec-form'
-import { mismatchesOf, type Mismatch } from './torque-spec-words'
+import { mismatchesOf, rangeWords, type Mismatch } from './torque-spec-words'
 
 /** What can be said of the torque while it is being typed. */
 export interface LiveTorque {
@@ -47,4 +50,34 @@ export function liveTorque(form: SpecForm, shopPercent: number): LiveTorque {
   }
   const problem = bandIssues(said)[0]?.message ?? null
   return { limits: problem ? null : specLimits(said, shopPercent), problem, mismatches }
+}
+
+export interface GoverningBand {
+  value: 'target' | 'printed'
+  /** What is printed, such as "20 ft·lb" or "3.5 to 4.8 kgf·m". */
+  label: string
+  printed: Quantity | null
+  limits: Limits | null
+  /** Why it cannot govern. */
+  problem: string | null
+}
+
+/** The two bands between which the approver of a spec printed in two units decides: everything follows from the one that governs. */
+export function governingBands(revision: SpecRevisionAnswer, shopPercent: number): GoverningBand[] {
+  const { tolerance, printedLimits } = revision
+  const plain = (noted: SpecRevisionAnswer['target']) => noted && { value: noted.value, unit: noted.unit }
+  const band = (value: 'target' | 'printed', printed: Quantity | null, limited: Tolerance | null): GoverningBand => {
+    const said = { target: printed ?? undefined, tolerance: limited }
+    const problem = bandIssues(said)[0]?.message ?? null
+    const range = limited?.kind === 'limits' ? rangeWords(limited.lower, limited.upper) : ''
+    return {
+      value, printed, problem,
+      label: printed ? formatQuantity(printed) : range,
+      limits: problem ? null : specLimits(said, shopPercent),
+    }
+  }
+  return [
+    band('target', plain(revision.target), tolerance),
+    band('printed', plain(revision.printed), printedLimits ? { kind: 'limits', ...printedLimits } : tolerance),
+  ]
 }

@@ -1,6 +1,6 @@
 import type { BoltPlace, CreateSpecBody } from '#shared/schemas/torque-specs'
 import { preparationTexts } from '#shared/torque/preparation'
-import { countOf, placesFor, readOrder, readPositions } from './bolt-numbers'
+import { countOf, placesFor, readPrintedOrder, readPositions } from './bolt-numbers'
 import { FieldReader, type FormReading } from './form-issues'
 import type { PreparationEntry, SpecForm, StageEntry } from './torque-spec-form'
 
@@ -18,7 +18,7 @@ export function preparationCode(text: string, taken: readonly string[]): string 
 export function readSpecForm(form: SpecForm, revise = false): FormReading {
   const read = new FieldReader()
   const count = countOf(form.boltCount)
-  const order = readOrder(form.order, count, form.pattern)
+  const order = readPrintedOrder(form.order, count, form.pattern)
   const long = readPositions(form.longBolts, count, form.pattern)
   if (!order.ok) read.issues.push({ path: 'order', message: order.message })
   if (!long.ok) read.issues.push({ path: 'places', message: long.message })
@@ -112,3 +112,10 @@ function readPlaces(form: SpecForm, long: readonly number[], count: number | nul
   const places = drawn.map(place => long.includes(place.position) ? { ...place, long: true } : place)
   return places.length > 0 ? places : undefined
 }
+
+/** Fields of the API that have their own place in the form. */
+export const specFields = [
+  'component', 'application', 'appliesTo', 'boltCount', 'pattern', 'order', 'places', 'thread', 'propertyClass',
+  'threadCondition', 'runningTorque', 'target', 'printed', 'printedLimits', 'tolerance', 'stages', 'preparation',
+  'retorque', 'caution', 'source',
+]

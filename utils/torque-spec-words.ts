@@ -76,7 +76,7 @@ export function mismatchesOf(spec: {
 }
 
 /** Where a value is printed, in one line: "TM 1-2-3, paragraph 4-46A, page 4-95, 1998". */
-export function sourceWords(source: { title: string, section?: string | null, page?: string | null, date?: string | null }): string {
+export function specSourceWords(source: { title: string, section?: string | null, page?: string | null, date?: string | null }): string {
   const page = source.page && (/^p/i.test(source.page) ? source.page : `page ${source.page}`)
   return [source.title, source.section, page, source.date].filter(Boolean).join(', ')
 }
@@ -102,4 +102,20 @@ export function retorqueWords(retorque: { afterKm?: number, afterDays?: number, 
   if (!retorque) return null
   const after = [retorque.afterKm && `${retorque.afterKm} km`, retorque.afterDays && formatCount(retorque.afterDays, 'day')].filter(Boolean)
   return [after.length > 0 && `after ${after.join(' or ')}`, retorque.note].filter(Boolean).join('; ') || null
+}
+
+/** What stands as printed for the target: the value that governs, or none where only limits are printed. */
+export function governingTarget({ target, printed, governs }: {
+  target: Quantity | null
+  printed: Quantity | null
+  governs: 'target' | 'printed' | null
+}): Quantity | null {
+  const value = governs === 'printed' ? printed : target
+  return value && { value: value.value, unit: value.unit }
+}
+
+/** How far apart two printed values are, and how far rounding reaches: "2.1 N·m apart; rounding explains 1.2 N·m." */
+export function flagWords({ diffNm, limitNm }: { diffNm: number, limitNm: number }): string {
+  const figure = (nm: number) => formatNumber(Math.abs(nm), Math.abs(nm) < 0.95 ? 2 : 1)
+  return `${figure(diffNm)} N·m apart; rounding explains ${figure(limitNm)} N·m.`
 }

@@ -1,5 +1,5 @@
 import type { WrenchAnswer } from '#shared/schemas/wrenches'
-import type { TorqueUnit } from '#shared/torque/units'
+import { toNm, type TorqueUnit } from '#shared/torque/units'
 import type { WrenchKind } from '#shared/types/words'
 import { classOf, permissiblePercent, type ToolClass } from '#shared/wrench/classes'
 import { FieldReader, type FormReading } from './form-issues'
@@ -72,10 +72,22 @@ export function readWrenchForm(form: WrenchForm): FormReading {
   return { value, issues: read.issues }
 }
 
-/** Only what differs from the wrench as it is, for a PATCH. */
-export function changedFields(reading: FormReading, before: FormReading): FormReading {
-  const old = Object.entries(before.value ?? {})
-  const changed = Object.entries(reading.value ?? {})
-    .filter(([key, value]) => JSON.stringify(value) !== JSON.stringify(old.find(([name]) => name === key)?.[1]))
-  return { value: Object.fromEntries(changed), issues: reading.issues }
+/**
+ * The deviation that class and range permit, where none of its own is typed: said when a wrench is changed, since the one
+ * kept would otherwise stay behind. The form as it is while the range is no number.
+ */
+function withPermissiblePercent(form: WrenchForm): WrenchForm {
+  const max = Number(form.max.replace(',', '.'))
+  if (form.permissiblePercent.trim() || !(max > 0)) return form
+  const toolClass = classOf({ kind: form.kind, toolClass: form.toolClass || null })
+  return { ...form, permissiblePercent: String(permissiblePercent(toolClass, toNm({ value: max, unit: form.unit }))) }
+}
+
+/** Only what the form after a change says otherwise than before, for a PATCH. */
+export function wrenchChange(before: WrenchForm, after: WrenchForm): FormReading {
+  const { value, issues } = readWrenchForm(withPermissiblePercent(after))
+  const old = Object.entries(readWrenchForm(withPermissiblePercent(before)).value ?? {})
+  const changed = Object.entries(value ?? {})
+    .filter(([key, said]) => JSON.stringify(said) !== JSON.stringify(old.find(([name]) => name === key)?.[1]))
+  return { value: Object.fromEntries(changed), issues }
 }

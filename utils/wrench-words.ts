@@ -62,3 +62,11 @@ export function deviationWords(percent: number, digits = 1): string {
   if (Number(Math.abs(percent).toFixed(digits)) === 0) return 'reads true'
   return percent > 0 ? 'reads high: the bolt gets less' : 'reads low: the bolt gets more'
 }
+
+/** Days to the due date say something only of a wrench that is in use. */
+export function showsDaysLeft({ status, daysLeft }: { status: CalibrationStatus, daysLeft: number | null }): boolean {
+  return daysLeft !== null && (status === 'valid' || status === 'due_soon' || status === 'overdue')
+}
+
+/** The sign of a deviation in two words, where there is no room for more. */
+export const readsWord = (percent: number): string => deviationWords(percent, 2).split(':')[0] ?? ''

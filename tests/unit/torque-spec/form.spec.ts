@@ -132,7 +132,7 @@ const revision: SpecRevisionAnswer = {
   ],
   order: [1, 3, 2, 4], secondCheckRequired: true, oneTimeUse: true, retorque: { afterKm: 80 }, caution: 'Hot.',
   source: { title: 'Demo manual', section: '3', page: null, date: '2024' }, limits: { targetNm, lowerNm: 45, upperNm: 55 },
-  flags: [], governs: null, shopValue: false, createdBy: person, createdAt: '2026-11-01T08:00:00Z',
+  flags: [], governs: null, shopValue: false, reasoning: null, createdBy: person, createdAt: '2026-11-01T08:00:00Z',
   approvedBy: person, approvedAt: '2026-11-02T08:00:00Z', withdrawnReason: null,
 }
 const spec: SpecDetail = {

@@ -1,8 +1,8 @@
 import { describe, expect, it } from 'vitest'
-import { readOrder, readPositions } from '../../../utils/bolt-numbers'
+import { readPrintedOrder, readPositions } from '../../../utils/bolt-numbers'
 import { emptySpecForm, quantityEntry } from '../../../utils/torque-spec-form'
 import { liveTorque } from '../../../utils/torque-spec-live'
-import { appliesToWords, explainMismatch, mismatchesOf, retorqueWords, sourceWords, toleranceWords } from '../../../utils/torque-spec-words'
+import { appliesToWords, explainMismatch, mismatchesOf, retorqueWords, specSourceWords, toleranceWords } from '../../../utils/torque-spec-words'
 
 describe('explainMismatch', () => {
   it.each([
@@ -43,7 +43,7 @@ describe('words of a spec', () => {
   })
 
   it('cites the source in one line', () => {
-    expect(sourceWords({ title: 'Manual 7', section: 'paragraph 4-46A', page: '4-95', date: null })).toBe('Manual 7, paragraph 4-46A, page 4-95')
+    expect(specSourceWords({ title: 'Manual 7', section: 'paragraph 4-46A', page: '4-95', date: null })).toBe('Manual 7, paragraph 4-46A, page 4-95')
   })
 
   it('names the vehicles', () => {
@@ -65,7 +65,7 @@ describe('bolt numbers', () => {
     ['a1, b2 A2 B1', 4, 'two_rows', [1, 4, 2, 3]],
     ['', null, '', []],
   ] as const)('reads %j', (text, count, pattern, positions) => {
-    expect(readOrder(text, count, pattern)).toEqual({ ok: true, positions })
+    expect(readPrintedOrder(text, count, pattern)).toEqual({ ok: true, positions })
   })
 
   it.each([
@@ -75,7 +75,7 @@ describe('bolt numbers', () => {
     ['1 2', null, 'Say how many bolts there are, then the order can be checked.'],
     ['1 x', 3, '“x” is no bolt number.'],
   ] as const)('refuses %j of %j', (text, count, message) => {
-    expect(readOrder(text, count, 'circle')).toEqual({ ok: false, message })
+    expect(readPrintedOrder(text, count, 'circle')).toEqual({ ok: false, message })
   })
 
   it('needs no count for a few positions', () => {

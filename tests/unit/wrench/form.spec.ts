@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest'
 import { createWrenchBody, updateWrenchBody, type WrenchAnswer } from '#shared/schemas/wrenches'
 import { readForm } from '../../../utils/form-issues'
-import { changedFields, emptyWrenchForm, readWrenchForm, wrenchFormFrom } from '../../../utils/wrench-form'
+import { emptyWrenchForm, readWrenchForm, wrenchChange, wrenchFormFrom } from '../../../utils/wrench-form'
 import { deviationText, deviationWords, rangeIn } from '../../../utils/wrench-words'
 
 const id = '00000000-0000-4000-8000-000000000001'
@@ -33,10 +33,14 @@ describe('a wrench form', () => {
     expect(wrenchFormFrom({ ...wrench, permissiblePercent: 3 }).permissiblePercent).toBe('3')
   })
 
+  it('says the deviation of a new class, where none of its own was typed', () => {
+    const before = wrenchFormFrom(wrench)
+    expect(readForm(updateWrenchBody, wrenchChange(before, { ...before, toolClass: 'II-G' }))).toEqual({ toolClass: 'II-G', permissiblePercent: 6 })
+  })
+
   it('sends only what was changed', () => {
     const before = wrenchFormFrom(wrench)
-    const reading = changedFields(readWrenchForm({ ...before, location: 'Rack 2', max: '210' }), readWrenchForm(before))
-    expect(readForm(updateWrenchBody, reading)).toEqual({ location: 'Rack 2', range: { min: 40, max: 210, unit: 'N.m' } })
+    expect(readForm(updateWrenchBody, wrenchChange(before, { ...before, location: 'Rack 2', max: '210' }))).toEqual({ location: 'Rack 2', range: { min: 40, max: 210, unit: 'N.m' } })
   })
 })
 
