@@ -33,11 +33,10 @@ export function useSignOffChoices(seen: () => readonly SignOffListItem[] | undef
   const { data: wrenches } = useRead<Page<WrenchAnswer>>('sign-off-wrenches', '/wrenches', { limit: 200 })
   const earlier = useState<Record<string, string>>('signers', () => ({}))
 
-  const names = computed(() => ({
-    ...earlier.value, ...Object.fromEntries((seen() ?? []).map(({ technician }) => [technician.id, technician.name])),
-  }))
-  watch(names, (known) => {
-    earlier.value = known
+  const ofThese = computed(() => Object.fromEntries((seen() ?? []).map(({ technician }) => [technician.id, technician.name])))
+  const names = computed(() => ({ ...earlier.value, ...ofThese.value }))
+  watch(ofThese, (these) => {
+    earlier.value = { ...earlier.value, ...these }
   })
 
   return {
