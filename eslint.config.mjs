@@ -15,6 +15,11 @@ const onlyShared = {
   message: 'shared/ imports only itself, zod/mini, convert-units, dayjs and canonicalize.',
 }
 
+/**
+ * @param {string[]} files
+ * @param {{ regex: string, message: string }[]} patterns
+ * @returns {import('eslint').Linter.Config}
+ */
 const arrows = (files, ...patterns) => ({ files, rules: { 'no-restricted-imports': ['error', { patterns }] } })
 
 export default withNuxt(

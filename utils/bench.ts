@@ -68,10 +68,10 @@ export function checkBand(entry: BandEntry, shopDefaultPercent: number): Worked<
     read.issues.push({ path: 'uncertainty', message: 'From 0 to 100.' })
   }
   const told = tolerance !== undefined && (target !== undefined || tolerance?.kind === 'limits')
-  if (!told || read.issues.length > 0) return worked(read, null)
+  if (!told || read.issues.length > 0) return worked<BandResult>(read, null)
   const said = { target, tolerance }
   for (const { path, message } of bandIssues(said)) read.issues.push({ path: fieldOf[path.join('.')] ?? path.join('.'), message })
-  if (read.issues.length > 0) return worked(read, null)
+  if (read.issues.length > 0) return worked<BandResult>(read, null)
   const limits = specLimits(said, shopDefaultPercent)
   if (!entered) return worked(read, { limits, reading: null })
   const nm = toNm(entered)
@@ -104,14 +104,14 @@ export function workSetting(entry: SettingEntry): Worked<WrenchSetting> {
   if (extensionMm !== undefined && effectiveLengthMm === undefined) {
     read.issues.push({ path: 'length', message: 'With an adapter the effective length counts: drive centre to grip centre.' })
   }
-  if (!target || read.issues.length > 0) return worked(read, null)
+  if (!target || read.issues.length > 0) return worked<WrenchSetting>(read, null)
   const adapter = extensionMm === undefined || effectiveLengthMm === undefined ? null : { extensionMm, angleDeg, effectiveLengthMm }
   try {
     return worked(read, wrenchSetting({ targetNm: toNm(target), unit: target.unit, adapter, multiplierRatio, graduation }))
   } catch (error) {
     if (!(error instanceof RangeError)) throw error
     read.issues.push({ path: 'extension', message: error.message })
-    return worked(read, null)
+    return worked<WrenchSetting>(read, null)
   }
 }
 

@@ -1,5 +1,5 @@
 import { mountSuspended } from '@nuxt/test-utils/runtime'
-import { flushPromises } from '@vue/test-utils'
+import { flushPromises, type VueWrapper } from '@vue/test-utils'
 import { describe, expect, it, vi } from 'vitest'
 import type { UserAnswer } from '#shared/schemas/auth'
 import { PeopleAdd, PeopleChange, PeopleRules, PeopleTable, PeopleTemporary } from '#components'
@@ -9,8 +9,7 @@ const person: UserAnswer = {
   id: '018f0000-0000-7000-8000-000000000001', name: 'Tomas Brandt', email: 'tomas@shop.example', role: 'technician', active: true,
   hasPin: true, pinLocked: false, createdAt: '2026-01-01T08:00:00.000Z', lastSeenAt: null, can: { rename: true, changeAccess: true },
 }
-type Mounted = Awaited<ReturnType<typeof mountSuspended>>
-const press = (within: Mounted, label: string) => within.findAll('button').find(button => button.text() === label)?.trigger('click')
+const press = (within: VueWrapper, label: string) => within.findAll('button').find(button => button.text() === label)?.trigger('click')
 
 it('the list shows who is disabled and whose PIN is locked', async () => {
   const table = await mountSuspended(PeopleTable, { props: { rows: [person, { ...person, id: person.id.replace(/1$/, '2'), active: false, pinLocked: true }], sort: 'name', timeZone: 'UTC' } })
