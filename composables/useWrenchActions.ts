@@ -1,5 +1,4 @@
 import type { CalibrationAnswer, CreateCalibrationBody, CreateWrenchBody, UpdateWrenchBody, WrenchAnswer } from '#shared/schemas/wrenches'
-import type { WrenchState } from '#shared/types/words'
 
 /** What people do with wrenches. Each throws ApiError when the server refuses. */
 export function useWrenchActions() {
@@ -19,12 +18,10 @@ export function useWrenchActions() {
     return wrench
   }
 
-  async function setState(id: string, state: WrenchState, stateReason: string) {
-    const wrench = await $api<WrenchAnswer>(`/wrenches/${id}`, {
-      method: 'PATCH', body: { state, stateReason: stateReason.trim() || undefined },
-    })
+  async function setState(id: string, body: Pick<UpdateWrenchBody, 'state' | 'stateReason'>) {
+    const wrench = await $api<WrenchAnswer>(`/wrenches/${id}`, { method: 'PATCH', body })
     await refreshNuxtData(`wrench:${id}`)
-    add(`${wrench.assetTag}: ${wrenchStateWords[state].toLowerCase()}.`)
+    add(`${wrench.assetTag}: ${wrenchStateWords[wrench.state].toLowerCase()}.`)
     return wrench
   }
 
