@@ -1,12 +1,11 @@
 // https://nuxt.com/docs/api/configuration/nuxt-config
 export default defineNuxtConfig({
-  future: { compatibilityVersion: 4 },
-  srcDir: '.',
-  serverDir: 'server',
-  compatibilityDate: '2026-12-01',
-  devtools: { enabled: false },
-  telemetry: false,
   modules: ['@pinia/nuxt', '@nuxtjs/tailwindcss', 'nuxt-auth-utils', '@nuxt/eslint'],
+
+  // Components are named after their folder and file: components/bolt/Pattern.vue is <BoltPattern>.
+  components: [{ path: '~/components', pathPrefix: true }],
+  imports: { scan: true },
+  devtools: { enabled: false },
 
   app: {
     head: {
@@ -21,20 +20,25 @@ export default defineNuxtConfig({
   },
 
   css: ['~/assets/css/fonts.css'],
-  tailwindcss: { cssPath: '~/assets/css/tailwind.css', viewer: false },
 
-  // Components are named after their folder and file: components/bolt/Pattern.vue is <BoltPattern>.
-  components: [{ path: '~/components', pathPrefix: true }],
-  imports: { scan: true },
-
-  // The cookie holds only a session id; each route decides for itself whether it needs one.
-  auth: { loadStrategy: 'none' },
-  pinia: { storesDirs: ['./stores/**'] },
-  eslint: { config: { stylistic: { semi: false, quotes: 'single', braceStyle: '1tbs' }, standalone: true } },
+  runtimeConfig: {
+    session: { name: 'jamnut', maxAge: 60 * 60 * 12, password: '', cookie: { sameSite: 'lax', secure: false } },
+  },
+  srcDir: '.',
+  serverDir: 'server',
+  future: { compatibilityVersion: 4 },
 
   experimental: {
     appManifest: false,
     defaults: { nuxtLink: { prefetchOn: { visibility: false, interaction: true } } },
+  },
+  compatibilityDate: '2026-12-01',
+
+  nitro: {
+    compressPublicAssets: { gzip: true, brotli: true },
+    typescript: { strict: true },
+    // Sequelize asks for its driver by a computed name that no tracer sees.
+    externals: { traceInclude: ['node_modules/pg/lib/index.js'] },
   },
 
   typescript: {
@@ -44,13 +48,7 @@ export default defineNuxtConfig({
       exclude: ['../.data', '../.output', '../node_modules'],
     },
   },
-
-  nitro: {
-    compressPublicAssets: { gzip: true, brotli: true },
-    typescript: { strict: true },
-    // Sequelize asks for its driver by a computed name that no tracer sees.
-    externals: { traceInclude: ['node_modules/pg/lib/index.js'] },
-  },
+  telemetry: false,
 
   hooks: {
     // nuxt-auth-utils opens a session endpoint to everybody; ours is /api/auth/me.
@@ -59,7 +57,9 @@ export default defineNuxtConfig({
     },
   },
 
-  runtimeConfig: {
-    session: { name: 'jamnut', maxAge: 60 * 60 * 12, password: '', cookie: { sameSite: 'lax', secure: false } },
-  },
+  // The cookie holds only a session id; each route decides for itself whether it needs one.
+  auth: { loadStrategy: 'none' },
+  eslint: { config: { stylistic: { semi: false, quotes: 'single', braceStyle: '1tbs' }, standalone: true } },
+  pinia: { storesDirs: ['./stores/**'] },
+  tailwindcss: { cssPath: '~/assets/css/tailwind.css', viewer: false },
 })

@@ -21,8 +21,8 @@ export interface RouteInput<C extends RouteContract> {
   body: BodyOf<C>
 }
 /** A mutation runs in one transaction; a read has none; a public route has nobody asking. */
-type ContextOf<C extends RouteContract> =
-  C['policy'] extends 'public' ? Pick<ReadContext, 'now' | 'requestId'>
+type ContextOf<C extends RouteContract>
+  = C['policy'] extends 'public' ? Pick<ReadContext, 'now' | 'requestId'>
     : C['method'] extends 'GET' ? ReadContext
       : C['transaction'] extends 'none' ? ReadContext : Context
 

@@ -35,4 +35,3 @@ export function env(): Env {
   known ??= readEnv()
   return known
 }
-

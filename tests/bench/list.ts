@@ -6,7 +6,8 @@ import type { Call } from './session'
 export async function benchList(call: Call, databaseUrl: string): Promise<string[]> {
   const pool = new pg.Pool({ connectionString: databaseUrl, max: 10 })
   try {
-    const { rows: [{ shop_id: shopId }] } = await pool.query<{ shop_id: string }>('SELECT shop_id FROM sign_offs LIMIT 1')
+    const { rows } = await pool.query<{ shop_id: string }>('SELECT shop_id FROM sign_offs LIMIT 1')
+    const shopId = rows[0]?.shop_id
     const sql = `SELECT s.*, (SELECT json_agg(r) FROM sign_off_readings r WHERE r.sign_off_id = s.id AND r.counts) AS readings
       FROM sign_offs s WHERE s.shop_id = $1 ORDER BY s.signed_at DESC, s.id DESC LIMIT 50`
     const bare = await measure(async () => {

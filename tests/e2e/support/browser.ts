@@ -71,7 +71,7 @@ export function useBrowser() {
       const page = await context.newPage()
       let statuses: number[] = []
       watch(page, () => statuses)
-      return { page, context, expect: (...list) => { statuses = list } }
+      return { page, context, expect: (...list) => void (statuses = list) }
     },
   }
 }

@@ -197,9 +197,9 @@ describe('what a sign-off is refused for', () => {
     expect(withReason.body.readings[2]).toMatchObject({ nm: null, probabilityInBand: null, verdict: 'in_band' })
   })
   it('keeps a late entry as an exception, and refuses one from after the signature', async () => {
-    const signedAt = minutesFromNow(0)
-    expect((await refusal({}, { signedAt, tightenedAt: minutesFromNow(-61) })).body.exceptions).toEqual(['late_entry'])
-    expect((await refusal({}, { signedAt, tightenedAt: minutesFromNow(-59) })).body.exceptions).toEqual([])
+    const signedAt = minutesFromNow(1)
+    expect((await refusal({}, { signedAt, tightenedAt: minutesFromNow(-60.5) })).body.exceptions).toEqual(['late_entry'])
+    expect((await refusal({}, { signedAt, tightenedAt: minutesFromNow(-58) })).body.exceptions).toEqual([])
     expect((await refusal({}, { signedAt, tightenedAt: minutesFromNow(5) })).code).toBe('tightened_at')
   })
   it('a withdrawn spec, which offline becomes an exception', async () => {
