@@ -78,7 +78,7 @@ export function progressOf(joint: Joint, acts: readonly Act[], judge: Judge, { c
     for (const { number } of joint.stages) {
       const place = key(position, number)
       const made = last.get(place)
-      const state = covered.has(place) ? 'signed' : made ? stateAfter(made, joint.stages) : ready ? 'open' : 'waiting'
+      const state: PlaceState = covered.has(place) ? 'signed' : made ? stateAfter(made, joint.stages) : ready ? 'open' : 'waiting'
       states.set(place, state)
       ready = ready && (state === 'signed' || state === 'done')
     }
