@@ -34,8 +34,8 @@ export const open = ({ garage, vehicles }: Yard, number: string, unit: string, d
     (await openOrder(ctx, { number, vehicleId: need(vehicles, unit), complaint, bay })).id)
 
 /** A joint put on an order by its spec. @returns the group's id */
-export const list = ({ garage, specs }: Yard, orderId: string, component: string, daysAgo: number) =>
-  act(garage, garage.people.technician, at(garage, daysAgo, 8, 20), ctx => addGroup(ctx, orderId, { specRevisionId: need(specs, component) }))
+export const list = ({ garage, specs }: Yard, orderId: string, component: string, daysAgo: number, place = 0) =>
+  act(garage, garage.people.technician, at(garage, daysAgo, 8, 20 + place), ctx => addGroup(ctx, orderId, { specRevisionId: need(specs, component) }))
 
 /** The first wrench that fits a joint at a time, without a hint against it where there is one. */
 async function fitWrench(yard: Yard, actor: Actor, group: LoadedGroup, now: Date): Promise<InForce> {
@@ -129,7 +129,7 @@ export async function seedYear(yard: Yard): Promise<void> {
     const orderId = await open(yard, number, unit, daysAgo, complaint)
     const hand = hands[index % hands.length] ?? technician
     for (const [place, component] of components.entries()) {
-      const groupId = await list(yard, orderId, component, daysAgo)
+      const groupId = await list(yard, orderId, component, daysAgo, place)
       const when = at(garage, daysAgo, 10 + place, 5 + place * 7)
       const out = index === 6 && place === 0
       const edge = index % 7 === 3 && place === 1
@@ -169,8 +169,8 @@ export async function seedToday(yard: Yard): Promise<void> {
 
   const story = await open(yard, '26-1204', 'S-14', 1, 'Coolant on the floor, pump weeping', '1')
   await list(yard, story, 'Water pump to block', 1)
-  await sign(yard, await list(yard, story, 'Thermostat housing', 1), { by: technician, when: when(1, 15) })
-  await list(yard, story, 'Belt tensioner', 1)
+  await sign(yard, await list(yard, story, 'Thermostat housing', 1, 1), { by: technician, when: when(1, 15) })
+  await list(yard, story, 'Belt tensioner', 1, 2)
 
   const back = await open(yard, '26-1205', 'S-15', 1, 'Coolant leak returned, left side', '2')
   await list(yard, back, 'Coolant manifold', 1)

@@ -1,0 +1,67 @@
+import { describe, expect, it } from 'vitest'
+import { chooseWrench, expectSigned, prepare, signJoint, tighten } from './support/bay'
+import { api, signIn, useBrowser } from './support/browser'
+
+const browser = useBrowser()
+
+describe('the technician', () => {
+  it('signs the water pump on order 26-1204, bolt by bolt, and the record says what was true', async () => {
+    const { page } = await browser.visit()
+    await signIn(page, 'technician')
+    await page.waitForURL('**/bay')
+    await page.getByRole('link', { name: /26-1204/ }).click()
+    await page.getByRole('link', { name: /Water pump to block/ }).first().click()
+    await page.getByRole('heading', { name: /Water pump to block, 6 bolts/ }).waitFor()
+    await chooseWrench(page, 'W-07')
+    expect(await page.getByText('41 N·m').count()).toBeGreaterThan(0)
+    expect(await page.getByText('30.2 ft·lb').count()).toBeGreaterThan(0)
+    await prepare(page)
+    expect(await tighten(page, 6)).toEqual([1, 4, 2, 5, 3, 6])
+    expect(await page.getByText('sure', { exact: true }).count()).toBeGreaterThan(0)
+    await signJoint(page)
+    await expectSigned(page, 'In band')
+
+    await page.getByRole('link', { name: 'the whole record' }).click()
+    await page.getByRole('heading', { level: 1 }).waitFor()
+    const text = await page.locator('main').innerText()
+    for (const words of ['W-07', 'Runa Salter', '26-1204', 'Demo manual', 'simple acceptance']) expect(text).toContain(words)
+  })
+
+  it('is told at once that a wrench does not suit, and cannot choose it', async () => {
+    const { page } = await browser.visit()
+    await signIn(page, 'technician2')
+    const { items: [order] } = await api<{ items: { id: string }[] }>(page, 'GET', '/repair-orders?q=26-1205')
+    const { fastenerGroups } = await api<{ fastenerGroups: { id: string, name: string }[] }>(page, 'GET', `/repair-orders/${order?.id}`)
+    await page.goto(`/bay/fastener-groups/${fastenerGroups.find(group => group.name === 'Coolant manifold')?.id}`)
+    await page.getByRole('button', { name: 'Choose a wrench' }).click()
+    const dialog = page.getByRole('dialog')
+    await dialog.getByText('It is quarantined.').waitFor()
+    expect(await dialog.getByText('Its calibration is overdue.').count()).toBe(1)
+    expect(await dialog.getByRole('button', { name: /^W-12/ }).count()).toBe(0)
+    expect(await dialog.getByRole('button', { name: /^W-02/ }).count()).toBe(0)
+    expect(await dialog.getByRole('button', { name: /^W-03/ }).count()).toBe(1)
+  })
+
+  it('keeps what was entered through a wrong PIN and a reload', async () => {
+    const { page, expect: expectStatus } = await browser.visit()
+    await signIn(page, 'technician')
+    const { items: [order] } = await api<{ items: { id: string }[] }>(page, 'GET', '/repair-orders?q=26-1204')
+    const { fastenerGroups } = await api<{ fastenerGroups: { id: string, name: string }[] }>(page, 'GET', `/repair-orders/${order?.id}`)
+    await page.goto(`/bay/fastener-groups/${fastenerGroups.find(group => group.name === 'Belt tensioner')?.id}`)
+    await chooseWrench(page, 'W-07')
+    await prepare(page)
+    await tighten(page, 2)
+    await page.reload()
+    await page.getByText('2 of 2').waitFor()
+    expectStatus(403)
+    await page.getByRole('button', { name: /^Sign/ }).last().click()
+    const dialog = page.getByRole('dialog')
+    await dialog.getByLabel('Your PIN').fill('000001')
+    await dialog.getByRole('button', { name: /^Sign/ }).click()
+    await dialog.getByText(/tries/).waitFor()
+    await dialog.getByLabel('Your PIN').fill('408152')
+    await dialog.getByRole('button', { name: /^Sign/ }).click()
+    await page.getByRole('heading', { name: /^Signed/ }).first().waitFor()
+    await expectSigned(page, 'In band')
+  })
+})
