@@ -32,8 +32,9 @@ describe('the foreman', () => {
       await page.goto('/second-checks')
       await page.getByRole('link', { name: new RegExp(joint) }).first().click()
       await page.getByRole('heading', { name: joint }).waitFor()
-      await page.getByRole('button', { name: /sign|check/i }).last().click()
-      await signWithPin(page, /./)
+      await page.getByText('Watched while it was tightened').click()
+      await page.getByRole('button', { name: 'Sign the second check' }).click()
+      await signWithPin(page, 'Sign')
       await page.waitForURL('**/second-checks')
     }
     const { items: [order] } = await api<Listed>(page, 'GET', '/repair-orders?q=26-1208')
