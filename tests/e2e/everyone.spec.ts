@@ -114,7 +114,7 @@ describe('by keyboard alone', () => {
     await page.getByRole('dialog').getByLabel('Your PIN').waitFor({ state: 'attached' })
     await page.keyboard.type(DEMO_PIN)
     await page.keyboard.press('Enter')
-    await page.getByRole('heading', { name: /^Signed/ }).first().waitFor()
+    await page.locator('#recorded-heading').waitFor()
     const group = await api<{ state: string }>(page, 'GET', `/fastener-groups/${elbow?.id}`)
     expect(group.state).toBe('signed')
   })

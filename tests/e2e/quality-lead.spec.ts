@@ -24,8 +24,23 @@ describe('the quality lead', () => {
     await page.getByLabel('Laboratory').fill('Invented laboratory')
     await page.getByLabel(/Certificate number/).fill('IL-2026-77')
     await page.getByLabel(/uncertainty/i).first().fill('0.5')
-    const cells = page.getByRole('table').first().getByRole('textbox')
-    const count = await cells.count()
-    expect(count).toBeGreaterThan(14)
+    const grids = page.locator('fieldset, section').filter({ has: page.getByLabel('Reading 1, reference') })
+    expect(await grids.count()).toBeGreaterThan(0)
+    const points = [40, 120, 200]
+    for (const field of ['indicated', 'reference']) {
+      for (let reading = 1; reading <= 5; reading += 1) {
+        const boxes = page.getByLabel(`Reading ${reading}, ${field}`)
+        for (const [index, target] of points.entries()) {
+          await boxes.nth(index).fill(String(field === 'reference' ? target * 0.995 : target))
+        }
+      }
+    }
+    await page.getByRole('button', { name: /^Record/ }).click()
+    await page.waitForURL(url => url.pathname === `/wrenches/${wrench?.id}`)
+    const after = await api<{ calibration: { status: string }, calibrations: { result: string, points: { meanDeviationPercent: number }[] }[] }>(page, 'GET', `/wrenches/${wrench?.id}`)
+    expect(after.calibration.status).toBe('valid')
+    expect(after.calibrations[0]?.result).toBe('pass')
+    // (100 − 99.5) / 99.5: the wrench reads high, the bolt gets less.
+    for (const point of after.calibrations[0]?.points ?? []) expect(point.meanDeviationPercent).toBeCloseTo(0.502513, 5)
   })
 })

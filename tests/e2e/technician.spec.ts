@@ -22,7 +22,7 @@ describe('the technician', () => {
     await expectSigned(page, 'In band')
 
     await page.getByRole('link', { name: 'the whole record' }).click()
-    await page.getByRole('heading', { level: 1 }).waitFor()
+    await page.getByText('W-07').first().waitFor()
     const text = await page.locator('main').innerText()
     for (const words of ['W-07', 'Runa Salter', '26-1204', 'Demo manual', 'simple acceptance']) expect(text).toContain(words)
   })
@@ -61,7 +61,7 @@ describe('the technician', () => {
     await dialog.getByText(/tries/).waitFor()
     await dialog.getByLabel('Your PIN').fill('408152')
     await dialog.getByRole('button', { name: /^Sign/ }).click()
-    await page.getByRole('heading', { name: /^Signed/ }).first().waitFor()
+    await page.locator('#recorded-heading').waitFor()
     await expectSigned(page, 'In band')
   })
 })

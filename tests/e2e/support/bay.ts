@@ -38,7 +38,7 @@ export async function tighten(page: Page, bolts: number): Promise<number[]> {
 export async function signJoint(page: Page): Promise<void> {
   await page.getByRole('button', { name: /^Sign/ }).last().click()
   await signWithPin(page, /^Sign/)
-  await page.getByRole('heading', { name: /^Signed/ }).first().waitFor()
+  await page.locator('#recorded-heading').waitFor()
 }
 
 /** The verdict beside "Signed", in words. */
