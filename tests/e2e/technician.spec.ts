@@ -22,7 +22,8 @@ describe('the technician', () => {
     await expectSigned(page, 'In band')
 
     await page.getByRole('link', { name: 'the whole record' }).click()
-    await page.getByText('W-07').first().waitFor()
+    await page.waitForURL('**/sign-offs/*')
+    await page.getByText('simple acceptance').first().waitFor()
     const text = await page.locator('main').innerText()
     for (const words of ['W-07', 'Runa Salter', '26-1204', 'Demo manual', 'simple acceptance']) expect(text).toContain(words)
   })
