@@ -1,3 +1,4 @@
+import { randomInt } from 'node:crypto'
 import { createServer, type Server } from 'node:http'
 import { createApp, createRouter, defineEventHandler, type EventHandler, toNodeListener } from 'h3'
 import supertest from 'supertest'
@@ -58,6 +59,9 @@ const isReport = (body: unknown) => typeof body === 'object' && body !== null &&
 
 /** A caller of the API: nobody, or a signed-in person. */
 export class Caller {
+  /** An address of its own, so that one test's failed sign-ins never stop another's. */
+  private readonly address = `10.${randomInt(256)}.${randomInt(256)}.${randomInt(256)}`
+
   constructor(private readonly server: Server, private readonly cookie: string | null) {}
 
   private async send(method: Method, path: string, body?: unknown, headers: Record<string, string> = {}) {
@@ -65,7 +69,7 @@ export class Caller {
     const agent = supertest(this.server)
     const start = { GET: agent.get(url), POST: agent.post(url), PUT: agent.put(url), PATCH: agent.patch(url) }[method]
     if (this.cookie) start.set('Cookie', this.cookie)
-    start.set(headers)
+    start.set({ 'X-Forwarded-For': this.address, ...headers })
     if (body !== undefined) start.send(typeof body === 'string' ? body : JSON.stringify(body))
     if (body !== undefined && !headers['Content-Type']) start.set('Content-Type', 'application/json')
     const answer = await start

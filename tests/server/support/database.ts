@@ -12,6 +12,8 @@ export function databaseUrl(): string {
 /** Opens the database for a file of tests, as the web server's role, and closes it after. */
 export function useDatabase(): void {
   beforeAll(() => {
+    // Each caller of the tests comes from an address of its own.
+    process.env.JAMNUT_TRUST_PROXY = '1'
     process.env.JAMNUT_PIN_PEPPER ??= 'a pepper only for tests, thirty-two or more'
     process.env.NUXT_SESSION_PASSWORD ??= 'a session password only for tests, long enough'
     openDatabase(databaseUrl())
