@@ -104,6 +104,12 @@ export function progressOf(joint: Joint, acts: readonly Act[], judge: Judge, { c
   }
 }
 
+/** Of each bolt and stage the last attempt that would be sent. */
+export function countingAttempts(attempts: readonly JudgedAttempt[]): JudgedAttempt[] {
+  return attempts.filter(made => !made.covered
+    && !attempts.some(other => other.position === made.position && other.stage === made.stage && other.attempt > made.attempt))
+}
+
 /** The paint on each bolt at a stage. */
 export function paintOf(joint: Joint, progress: Progress, stage: number, correctsId: string | null): Record<number, BoltState> {
   const covered = coveredPlaces(joint, correctsId)

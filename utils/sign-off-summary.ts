@@ -4,7 +4,7 @@ import { worstVerdict } from '#shared/torque/verdict'
 import { formatCount, verdictWords } from './format'
 import { stageName } from './fastener-group-words'
 import { boltsWords, type SignOffDraft } from './sign-off-draft'
-import type { Progress } from './sign-off-progress'
+import { countingAttempts, type Progress } from './sign-off-progress'
 import { enteredWords } from './sign-off-words'
 
 /** What the sign button says: all, a part with the rest left to others, or what is still to come. */
@@ -26,7 +26,7 @@ export function signBlock(draft: SignOffDraft, progress: Progress, { wrench, pre
 /** What is signed, line by line, for the moment before the PIN. */
 export function signLines(draft: SignOffDraft, progress: Progress, group: GroupAnswer, wrench: WrenchAnswer | null): string[] {
   const sent = progress.attempts.filter(made => !made.covered)
-  const counting = sent.filter(made => !sent.some(other => other.position === made.position && other.stage === made.stage && other.attempt > made.attempt))
+  const counting = countingAttempts(sent)
   const byStage = group.stages.flatMap((stage) => {
     const values = [...new Set(counting.filter(made => made.stage === stage.number).map(enteredWords))]
     const name = group.stages.length > 1 ? `${stageName(stage, group.limits)}: ` : ''
