@@ -1,12 +1,15 @@
 import { spawn } from 'node:child_process'
+import { createRequire } from 'node:module'
 import { mkdir, mkdtemp, readdir, readFile, rm, symlink, writeFile } from 'node:fs/promises'
 import { tmpdir } from 'node:os'
 import { join } from 'node:path'
 import { gzipSync } from 'node:zlib'
-import { chromium } from 'playwright-core'
+import type { BrowserType } from 'playwright-core'
 import type { Call } from './session'
 
 const root = join(import.meta.dirname, '../..')
+// Its bundle does not load as a module under the runner of the scripts.
+const { chromium }: { chromium: BrowserType } = createRequire(import.meta.url)('playwright-core')
 
 /** A bare Nuxt page of the same versions, built for comparison. @returns gzip bytes of the JavaScript that it loads */
 async function bareNuxtBytes(): Promise<number> {

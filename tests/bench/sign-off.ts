@@ -64,9 +64,10 @@ async function bareInserts(pool: pg.Pool): Promise<() => Promise<void>> {
   const [signOff] = await one('SELECT to_jsonb(s) AS row FROM sign_offs s ORDER BY received_at DESC LIMIT 1')
   const readings = await one('SELECT to_jsonb(r) AS row FROM sign_off_readings r WHERE sign_off_id = $1', [signOff?.id])
   const [entry] = await one('SELECT to_jsonb(l) AS row FROM log_entries l ORDER BY at DESC LIMIT 1')
-  let sequence = 1_000_000_000
+  let last = 1_000_000_000
   return async () => {
-    sequence += 1
+    last += 1
+    const sequence = last
     const id = uuidv7()
     const client = await pool.connect()
     try {
