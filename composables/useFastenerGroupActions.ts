@@ -1,13 +1,12 @@
 import type { SignOffDetail } from '#shared/schemas/sign-offs'
 
 /** What may be done about a joint besides tightening it. Each throws ApiError when the server refuses. */
-export function useFastenerGroupActions(groupId: string, changed: () => Promise<unknown>) {
+export function useFastenerGroupActions(groupId: string) {
   const $api = useApi()
   const { add } = useToasts()
 
   const post = (verb: string, body: object, words: string) => async () => {
     await $api(`/fastener-groups/${groupId}/${verb}`, { method: 'POST', body })
-    await changed()
     add(words)
   }
 

@@ -1,15 +1,15 @@
-interface Asked {
-  what: 'keep' | 'replace' | 'correct' | 'disturb' | 'concede' | 'notDisturbed'
-  position: number
-  signOffId: string
-}
+/** What is to be decided, about a bolt of the draft, an earlier sign-off, or the joint. */
+export type AskedDecision
+  = | { what: 'keep' | 'replace', position: number }
+    | { what: 'correct', signOffId: string }
+    | { what: 'disturb' | 'concede' | 'notDisturbed' }
 
-const words: Record<Asked['what'], (asked: Asked) => { title: string, text: string, act: string, withPin?: boolean, reason?: string }> = {
-  keep: ({ position }) => ({
-    title: `Leave bolt ${position} as it is`, text: 'It is signed out of band, with your reason. The foreman decides about it before the vehicle goes.', act: 'Leave it as it is',
+const words: Record<AskedDecision['what'], (bolt: string) => { title: string, text: string, act: string, withPin?: boolean, reason?: string }> = {
+  keep: bolt => ({
+    title: `Leave ${bolt} as it is`, text: 'It is signed out of band, with your reason. The foreman decides about it before the vehicle goes.', act: 'Leave it as it is',
   }),
-  replace: ({ position }) => ({
-    title: `New bolt in position ${position}`, text: 'Past an angle stage a bolt is not tightened again. Say what was done; the record carries it.', act: 'Start again with it', reason: `New bolt fitted in position ${position}.`,
+  replace: bolt => ({
+    title: `A new ${bolt}`, text: 'Past an angle stage a bolt is not tightened again. Say what was done; the record carries it.', act: 'Start again with it', reason: `New ${bolt} fitted.`,
   }),
   correct: () => ({
     title: 'Correct your sign-off', text: 'Both stay in the record: the new one stands, and names the old one with your reason.', act: 'Correct it',
@@ -26,42 +26,26 @@ const words: Record<Asked['what'], (asked: Asked) => { title: string, text: stri
 }
 
 /** What a person decides with a reason: about a bolt in the draft, or about the joint. */
-export function useFastenerGroupDecision(groupId: string, entry: SignOffEntry, changed: () => Promise<unknown>) {
-  const actions = useFastenerGroupActions(groupId, changed)
-  const asked = shallowRef<Asked | null>(null)
+export function useFastenerGroupDecision(groupId: string, entry: SignOffEntry, asked: AskedDecision, heard: { done: () => void, changed: () => void }) {
+  const actions = useFastenerGroupActions(groupId)
 
-  const act = useAct(async (reason: string, pin: string) => {
-    if (!asked.value) return
-    const { what, position, signOffId } = asked.value
-    if (what === 'keep' && entry.stage) {
-      entry.change(keepAsIs(entry.draft, position, entry.stage.number, reason))
-      entry.done(`Bolt ${position} stays as it is.`)
-    } else if (what === 'replace') {
-      entry.change(restart(entry.draft, position, reason))
-      entry.done(`Bolt ${position} begins again.`)
-    } else if (what === 'correct') entry.change(await actions.correct(signOffId, reason))
-    else if (what === 'disturb') await actions.disturb(reason)
-    else if (what === 'concede') await actions.concede(reason, pin)
-    else if (what === 'notDisturbed') await actions.markNotDisturbed(reason, pin)
-    asked.value = null
+  const { run, busy, refusal } = useAct(async (reason: string, pin: string) => {
+    if (asked.what === 'keep' && entry.stage) {
+      entry.change(keepAsIs(entry.draft, asked.position, entry.stage.number, reason))
+      entry.done(`Bolt ${asked.position} stays as it is.`)
+    } else if (asked.what === 'replace') {
+      entry.change(restart(entry.draft, asked.position, reason))
+      entry.done(`Bolt ${asked.position} begins again.`)
+    } else if (asked.what === 'correct') entry.change(await actions.correct(asked.signOffId, reason))
+    else {
+      if (asked.what === 'disturb') await actions.disturb(reason)
+      else if (asked.what === 'concede') await actions.concede(reason, pin)
+      else await actions.markNotDisturbed(reason, pin)
+      heard.changed()
+    }
+    heard.done()
   })
 
-  function ask(what: Asked['what'], about: Partial<Asked> = {}) {
-    act.reset()
-    asked.value = { position: 0, signOffId: '', ...about, what }
-  }
-
-  function close() {
-    asked.value = null
-  }
-
-  return {
-    asked,
-    words: computed(() => asked.value ? words[asked.value.what](asked.value) : { title: '', text: '', act: '' }),
-    refusal: computed(() => act.refusal.value?.message ?? null),
-    busy: act.busy,
-    ask,
-    close,
-    say: act.run,
-  }
+  const said = words[asked.what]('position' in asked ? `bolt ${asked.position}` : '')
+  return { said, decide: run, busy, error: computed(() => refusal.value?.message ?? null) }
 }

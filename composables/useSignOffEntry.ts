@@ -78,6 +78,11 @@ export function useSignOffEntry(groupId: string, group: Ref<GroupAnswer | null |
     ? null
     : again.value === target.value ? 'again' : progress.value.stateOf(target.value, stage.value.number))
 
+  /** The bolt looked at: one picked, else the one in hand where it is in trouble. */
+  const looked = computed(() => {
+    if (selected.value !== null) return selected.value
+    return again.value === null && ['again', 'restart', 'replace'].includes(targetState.value ?? '') ? target.value : null
+  })
   /** Bolts that have not been tightened at this stage at all: what "all clicked" enters. */
   const openBolts = computed(() => progress.value.todo.filter(position => progress.value.stateOf(position, progress.value.stage ?? 0) === 'open'))
 
@@ -134,6 +139,6 @@ export function useSignOffEntry(groupId: string, group: Ref<GroupAnswer | null |
   return reactive({
     draft, loaded, kept, change, patch, clear, typed, typing, typedUnit, selected, again, pickedStage, said,
     wrench, reach, judge, progress, stage, way, paint, computedSetting, setting, unit, value, judged, isOut,
-    prepMissing, contradicting, prepared, lastOf, target, targetState, openBolts, step, look, enterAt, press, done,
+    prepMissing, contradicting, prepared, lastOf, target, targetState, looked, openBolts, step, look, enterAt, press, done,
   })
 }

@@ -1,8 +1,7 @@
-import * as z from 'zod/mini'
-import { errorAnswer, type Issue } from '#shared/schemas/errors'
+import type { ErrorAnswer, Issue } from '#shared/schemas/errors'
 
 /** What stands in `data` of every refusal; the rest belongs to its code, such as `triesLeft`. */
-export type RefusalData = z.infer<typeof errorAnswer>['data']
+export type RefusalData = ErrorAnswer['data']
 
 /** The server did not answer at all. */
 const unreachable = 'The server did not answer. Nothing was saved; what you entered is still here. Try again.'
@@ -42,18 +41,26 @@ export class ApiError extends Error {
   }
 }
 
-const carried = z.object({ statusCode: z.number(), message: z.string(), data: errorAnswer.shape.data })
-const answered = z.object({ data: errorAnswer })
-const failed = z.object({ statusCode: z.number() })
+// Looked at by hand: every page reads errors, and the bay's tablets are not to load a schema library for it.
+const at = (value: unknown, name: string): unknown => typeof value === 'object' && value !== null ? Reflect.get(value, name) : undefined
+
+function isRefusalData(data: unknown): data is RefusalData {
+  const issues = at(data, 'issues')
+  return typeof at(data, 'code') === 'string' && (issues === undefined || Array.isArray(issues))
+}
+
+/** An error in the one shape of every refusal, whether it just came or was carried from the server to the browser. */
+function readRefusal(error: unknown): ApiError | null {
+  const [status, message, data] = [at(error, 'statusCode'), at(error, 'message'), at(error, 'data')]
+  return typeof status === 'number' && typeof message === 'string' && isRefusalData(data) ? new ApiError(status, message, data) : null
+}
 
 /** Reads whatever a request threw, or Nuxt carried over from the server, as an ApiError. */
 export function toApiError(error: unknown): ApiError {
   if (error instanceof ApiError) return error
-  const answer = answered.safeParse(error)
-  if (answer.success) return new ApiError(answer.data.data.statusCode, answer.data.data.message, answer.data.data.data)
-  const known = carried.safeParse(error)
-  if (known.success) return new ApiError(known.data.statusCode, known.data.message, known.data.data)
-  const status = failed.safeParse(error)
-  if (status.success) return new ApiError(status.data.statusCode, 'Something failed on our side. Nothing was saved.', { code: 'server_error' })
+  const refusal = readRefusal(at(error, 'data')) ?? readRefusal(error)
+  if (refusal) return refusal
+  const status = at(error, 'statusCode')
+  if (typeof status === 'number') return new ApiError(status, 'Something failed on our side. Nothing was saved.', { code: 'server_error' })
   return new ApiError(0, unreachable, { code: 'unreachable' })
 }

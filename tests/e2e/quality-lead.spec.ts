@@ -17,15 +17,15 @@ describe('the quality lead', () => {
   it('records a calibration whose figures follow from what was read', async () => {
     const { page } = await browser.visit({ width: 1440, height: 900 })
     await signIn(page, 'quality')
-    const { items: [wrench] } = await api<{ items: { id: string }[] }>(page, 'GET', '/wrenches?q=W-02')
+    const { items: [wrench] } = await api<{ items: { id: string }[] }>(page, 'GET', '/wrenches?q=W-09')
     const before = await api<{ calibration: { status: string } }>(page, 'GET', `/wrenches/${wrench?.id}`)
-    expect(before.calibration.status).toBe('overdue')
+    expect(before.calibration.status).toBe('due_soon')
     await page.goto(`/wrenches/${wrench?.id}/calibrations/new`, { waitUntil: 'networkidle' })
     await page.getByLabel('Laboratory').fill('Invented laboratory')
     await page.getByLabel(/Certificate number/).fill('IL-2026-77')
     await page.getByLabel(/uncertainty/i).first().fill('0.5')
     // A setting wrench is set to the point: only what the reference showed is typed.
-    for (const [index, target] of [40, 120, 200].entries()) {
+    for (const [index, target] of [30, 90, 150].entries()) {
       for (let reading = 1; reading <= 5; reading += 1) await page.getByLabel(`Reading ${reading}, reference`).nth(index).fill(String(target * 0.995))
     }
     await page.getByRole('button', { name: /^Record/ }).click()
