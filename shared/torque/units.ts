@@ -15,25 +15,36 @@ export interface Quantity {
 const poundForceN = 4.4482216152605
 const kilogramForceN = 9.80665
 
-const unit = (name: string, newtonMetres: number) => ({
-  name: { singular: name, plural: name },
-  to_anchor: newtonMetres,
-})
+/** Newton metres in one of each unit, exact: the library's own factors are rounded (lbf·ft is 3.8e-8 too large). */
+const newtonMetres: Record<TorqueUnit, number> = {
+  'N.m': 1,
+  'lbf.ft': poundForceN * 0.3048,
+  'lbf.in': poundForceN * 0.0254,
+  'ozf.in': poundForceN * 0.0254 / 16,
+  'kgf.m': kilogramForceN,
+  'kgf.cm': kilogramForceN / 100,
+  'cN.m': 0.01,
+  'dN.m': 0.1,
+  'kN.m': 1000,
+}
 
-// The library's own torque factors are rounded (lbf·ft is 3.8e-8 too large), so it gets exact ones from us.
-const convert = configureMeasurements<'torque', 'all', TorqueUnit>({
+const named = (unit: TorqueUnit) => ({ name: { singular: unit, plural: unit }, to_anchor: newtonMetres[unit] })
+
+let configured: ReturnType<typeof configure> | undefined
+/** The converter with our torque measure. Made when first asked for, so that a screen that only reads N·m loads none of it. */
+const configure = () => configureMeasurements<'torque', 'all', TorqueUnit>({
   torque: {
     systems: {
       all: {
-        'N.m': unit('newton metre', 1),
-        'lbf.ft': unit('pound-force foot', poundForceN * 0.3048),
-        'lbf.in': unit('pound-force inch', poundForceN * 0.0254),
-        'ozf.in': unit('ounce-force inch', poundForceN * 0.0254 / 16),
-        'kgf.m': unit('kilogram-force metre', kilogramForceN),
-        'kgf.cm': unit('kilogram-force centimetre', kilogramForceN / 100),
-        'cN.m': unit('centinewton metre', 0.01),
-        'dN.m': unit('decinewton metre', 0.1),
-        'kN.m': unit('kilonewton metre', 1000),
+        'N.m': named('N.m'),
+        'lbf.ft': named('lbf.ft'),
+        'lbf.in': named('lbf.in'),
+        'ozf.in': named('ozf.in'),
+        'kgf.m': named('kgf.m'),
+        'kgf.cm': named('kgf.cm'),
+        'cN.m': named('cN.m'),
+        'dN.m': named('dN.m'),
+        'kN.m': named('kN.m'),
       },
     },
   },
@@ -50,15 +61,17 @@ export function isTorqueUnit(x: unknown): x is TorqueUnit {
  */
 export function convertTorque(value: number, from: TorqueUnit, to: TorqueUnit): number {
   // The library takes NaN for zero; here what is no number must stay none.
-  return Number.isNaN(value) ? value : convert(value).from(from).to(to)
+  if (Number.isNaN(value)) return value
+  configured ??= configure()
+  return configured(value).from(from).to(to)
 }
 
-/** The torque in N·m, at full precision. */
+/** The torque in N·m, at full precision: one multiplication by the same exact factor that the converter has. */
 export function toNm(quantity: Quantity): number {
-  return convertTorque(quantity.value, quantity.unit, 'N.m')
+  return quantity.value * newtonMetres[quantity.unit]
 }
 
 /** A torque of `nm` N·m in another unit, at full precision. */
 export function fromNm(nm: number, unit: TorqueUnit): number {
-  return convertTorque(nm, 'N.m', unit)
+  return nm / newtonMetres[unit]
 }

@@ -29,3 +29,13 @@ describe('torque units', () => {
     }))
   })
 })
+
+describe('the short way to N·m and back', () => {
+  it('agrees with the converter to the last bits, in every unit', () => {
+    fc.assert(fc.property(fc.constantFrom(...torqueUnits), fc.double({ min: 1e-3, max: 1e6, noNaN: true }), (unit, value) => {
+      const close = (a: number, b: number) => Math.abs(a - b) <= 4 * Number.EPSILON * Math.abs(b)
+      expect(close(toNm({ value, unit }), convertTorque(value, unit, 'N.m'))).toBe(true)
+      expect(close(fromNm(value, unit), convertTorque(value, 'N.m', unit))).toBe(true)
+    }))
+  })
+})
