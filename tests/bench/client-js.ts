@@ -1,48 +1,64 @@
 import { spawn } from 'node:child_process'
 import { createRequire } from 'node:module'
-import { mkdir, mkdtemp, readdir, readFile, rm, symlink, writeFile } from 'node:fs/promises'
+import { createServer } from 'node:net'
+import { mkdir, mkdtemp, rm, symlink, writeFile } from 'node:fs/promises'
 import { tmpdir } from 'node:os'
 import { join } from 'node:path'
 import { gzipSync } from 'node:zlib'
-import type { BrowserType } from 'playwright-core'
+import type { BrowserType, Page } from 'playwright-core'
 import type { Call } from './session'
 
 const root = join(import.meta.dirname, '../..')
 // Its bundle does not load as a module under the runner of the scripts.
 const { chromium }: { chromium: BrowserType } = createRequire(import.meta.url)('playwright-core')
 
-/** A bare Nuxt page of the same versions, built for comparison. @returns gzip bytes of the JavaScript that it loads */
-async function bareNuxtBytes(): Promise<number> {
+/** Builds a bare Nuxt page of the same versions, serves it while `work(address)` runs, and cleans up. */
+async function withBareNuxt<Result>(work: (address: string) => Promise<Result>): Promise<Result> {
   const folder = await mkdtemp(join(tmpdir(), 'jamnut-bare-'))
   try {
     await symlink(join(root, 'node_modules'), join(folder, 'node_modules'))
     await writeFile(join(folder, 'package.json'), '{ "private": true, "type": "module" }')
     await writeFile(join(folder, 'nuxt.config.ts'), `export default defineNuxtConfig({
-      future: { compatibilityVersion: 4 }, srcDir: '.', compatibilityDate: '2026-12-01', telemetry: false, experimental: { appManifest: false } })`)
+      future: { compatibilityVersion: 4 }, srcDir: '.', buildDir: '.nuxt', compatibilityDate: '2026-12-01', telemetry: false, experimental: { appManifest: false } })`)
     await writeFile(join(folder, 'app.vue'), '<template><NuxtPage /></template>')
     await mkdir(join(folder, 'pages'))
     await writeFile(join(folder, 'pages/index.vue'), '<template><p>Bare</p></template>')
     await run('npx', ['nuxt', 'build'], folder)
-    const scripts = join(folder, '.output/public/_nuxt')
-    const entry = await entryFiles(scripts)
-    return sum(await Promise.all(entry.map(async name => gzipSync(await readFile(join(scripts, name))).length)))
+    const port = await freePort()
+    const server = spawn('node', ['.output/server/index.mjs'], { cwd: folder, env: { ...process.env, NITRO_HOST: '127.0.0.1', NITRO_PORT: String(port) }, stdio: 'ignore' })
+    try {
+      const address = `http://127.0.0.1:${port}`
+      for (let tries = 0; tries < 100 && !await fetch(address).then(answer => answer.ok, () => false); tries += 1) await new Promise(resolve => setTimeout(resolve, 100))
+      return await work(address)
+    } finally {
+      server.kill('SIGTERM')
+    }
   } finally {
     await rm(folder, { recursive: true, force: true })
   }
 }
 
-const sum = (values: readonly number[]) => values.reduce((total, value) => total + value, 0)
-
-/** The scripts of the bare build: all but the error pages', which no good page loads. */
-async function entryFiles(scripts: string): Promise<string[]> {
-  const names = (await readdir(scripts)).filter(name => name.endsWith('.js'))
-  const kept: string[] = []
-  for (const name of names) {
-    const text = await readFile(join(scripts, name), 'utf8')
-    if (!/error-404|error-500|statusMessage.{0,40}description/.test(text.slice(0, 2000))) kept.push(name)
-  }
-  return kept
+function freePort(): Promise<number> {
+  return new Promise((resolve) => {
+    const probe = createServer().listen(0, '127.0.0.1', () => {
+      const address = probe.address()
+      probe.close(() => resolve(typeof address === 'object' && address ? address.port : 0))
+    })
+  })
 }
+
+/** The JavaScript that a page loads until it is still, each file once, gzip bytes. */
+async function loadedBytes(page: Page, address: string): Promise<number> {
+  const scripts = new Map<string, Promise<number>>()
+  page.on('response', (response) => {
+    const url = response.url()
+    if (url.endsWith('.js') && !scripts.has(url)) scripts.set(url, response.body().then(body => gzipSync(body).length))
+  })
+  await page.goto(address, { waitUntil: 'networkidle' })
+  return sum(await Promise.all(scripts.values()))
+}
+
+const sum = (values: readonly number[]) => values.reduce((total, value) => total + value, 0)
 
 function run(command: string, args: string[], cwd: string): Promise<void> {
   return new Promise((resolve, reject) => {
@@ -68,13 +84,8 @@ export async function benchClientJs(baseUrl: string, call: Call): Promise<string
     await page.getByRole('button', { name: 'Sign in' }).click()
     await page.waitForURL(url => !url.pathname.startsWith('/sign-in'))
     const fresh = await (await browser.newContext({ baseURL: baseUrl, storageState: await page.context().storageState() })).newPage()
-    const scripts: Promise<number>[] = []
-    fresh.on('response', (response) => {
-      if (response.url().endsWith('.js')) scripts.push(response.body().then(body => gzipSync(body).length))
-    })
-    await fresh.goto(`/bay/fastener-groups/${groupId}`, { waitUntil: 'networkidle' })
-    const ours = sum(await Promise.all(scripts))
-    const bare = await bareNuxtBytes()
+    const ours = await loadedBytes(fresh, `/bay/fastener-groups/${groupId}`)
+    const bare = await withBareNuxt(async address => loadedBytes(await (await browser.newContext()).newPage(), address))
     const kilo = (bytes: number) => `${(bytes / 1024).toFixed(1)} kB`
     return [
       `${'client JavaScript, bare Nuxt page'.padEnd(52)} ${kilo(bare)} gzip`,
