@@ -18,6 +18,16 @@ export default defineConfig(async () => ({
         },
       },
       {
+        // The same rules on the other side of the day: nothing may depend on where the machine stands.
+        resolve: { alias },
+        test: {
+          name: 'elsewhere',
+          environment: 'node',
+          include: ['tests/unit/{torque,wrench,vehicle,statistics,fastener,format,server}/**/*.spec.ts', 'tests/published/**/*.spec.ts'],
+          env: { TZ: 'Pacific/Auckland' },
+        },
+      },
+      {
         resolve: { alias: [...alias, { find: '#imports', replacement: `${root}tests/server/support/imports.ts` }] },
         test: {
           name: 'server',

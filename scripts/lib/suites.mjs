@@ -1,7 +1,7 @@
 import { Stop } from './say.mjs'
 
 /** What npm test runs, in this order. */
-export const suites = ['lint', 'types', 'unit', 'nuxt', 'server', 'e2e']
+export const suites = ['lint', 'types', 'unit', 'elsewhere', 'nuxt', 'server', 'e2e']
 
 /** The suites that the arguments of scripts/test.mjs name: all without one. 'bench' runs only when named. */
 export function chosen(args) {

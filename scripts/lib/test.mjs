@@ -96,6 +96,7 @@ export async function test(args) {
     lint: () => check(checks.lint),
     types: () => check(checks.types),
     unit: () => project('unit', clean),
+    elsewhere: () => project('elsewhere', clean),
     nuxt: () => project('nuxt', clean),
     server: async () => project('server', { ...env, ...await makeDatabase('jamnut_server', env) }),
     e2e: () => withServer('e2e', env, served => project('e2e', served)),

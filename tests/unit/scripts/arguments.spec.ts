@@ -6,7 +6,7 @@ import { chosen, needs } from '../../../scripts/lib/suites.mjs'
 
 describe('the suites of npm test', () => {
   it('are all but the bench without arguments', () => {
-    expect(chosen([])).toEqual(['lint', 'types', 'unit', 'nuxt', 'server', 'e2e'])
+    expect(chosen([])).toEqual(['lint', 'types', 'unit', 'elsewhere', 'nuxt', 'server', 'e2e'])
   })
 
   it('are the named ones, in our order', () => {
