@@ -31,12 +31,25 @@ export class Reply<Body> {
   constructor(readonly status: number, readonly body: Body) {}
 }
 
+type FormIssue = NonNullable<ReturnType<z.ZodMiniType['safeParse']>['error']>['issues'][number]
+
+/** One issue of a form as the caller reads it; of a choice between forms those of the one that was nearly met. */
+function issuesOf(issue: FormIssue, above: readonly PropertyKey[] = []): Issue[] {
+  const path = [...above, ...issue.path]
+  if (issue.code === 'unrecognized_keys') {
+    return issue.keys.map(key => ({ path: [...path, key].map(String).join('.'), message: 'This field is not known.', code: issue.code }))
+  }
+  if (issue.code === 'invalid_union') {
+    const [nearest] = issue.errors.toSorted((one, other) => one.length - other.length)
+    if (nearest && nearest.length > 0) return nearest.flatMap(inner => issuesOf(inner, path))
+  }
+  return [{ path: path.map(String).join('.'), message: issue.message, code: issue.code }]
+}
+
 function parse(schema: z.ZodMiniType, value: unknown) {
   const result = schema.safeParse(value, { error: sayIssue })
   if (result.success) return result.data
-  throw invalid(result.error.issues.flatMap((issue): Issue[] => issue.code === 'unrecognized_keys'
-    ? issue.keys.map(key => ({ path: [...issue.path, key].join('.'), message: 'This field is not known.', code: issue.code }))
-    : [{ path: issue.path.join('.'), message: issue.message, code: issue.code }]))
+  throw invalid(result.error.issues.flatMap(issue => issuesOf(issue)))
 }
 
 /**

@@ -27,6 +27,7 @@ ladder({
     return { id: await buildOrder(garage), revisionId: (await buildSpec(garage)).revisionId }
   },
   valid: ({ revisionId }) => ({ specRevisionId: revisionId }),
+  spoil: { specRevisionId: ['x', 7, null], boltCount: [0, -1, 1.5, 121, 'x'], name: ['', 7] },
   log: 'fastener_groups.create',
 })
 ladder({
