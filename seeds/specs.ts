@@ -19,7 +19,7 @@ const safety: Extra = { jointClass: 'safety', secondCheckRequired: true, threadC
 const wheel: Extra = { ...safety, pattern: 'circle', secondCheckRequired: false, retorque: { afterKm: 80, note: 'Check again after the first drive' } }
 
 const lines: Line[] = [
-  ['Water pump to block', cooling, 6, 41, 'N.m', '6-12', '214', { ...sealing, pattern: 'circle', thread: 'M8x1.25', propertyClass: '8.8', places: [{ position: 3, long: true }, { position: 6, long: true }], preparation: [clean, gasket, blind], caution: 'Long bolts in positions 3 and 6. Blind holes: blow them out dry before the bolts go in.' }],
+  ['Water pump to block', cooling, 6, 41, 'N.m', '6-12', '214', { ...sealing, pattern: 'circle', thread: 'M8x1.25', propertyClass: '8.8', places: [{ position: 3, long: true }, { position: 6, long: true }], preparation: [clean, gasket, blind], secondCheckRequired: true, caution: 'Long bolts in positions 3 and 6. Blind holes: blow them out dry before the bolts go in.' }],
   ['Thermostat housing', cooling, 3, 22, 'N.m', '6-14', '219', { ...sealing, pattern: 'circle', thread: 'M6x1' }],
   ['Belt tensioner', 'Engine, accessory drive', 2, 48, 'N.m', '6-20', '231', { pattern: 'row', threadCondition: 'dry', preparation: [clean] }],
   ['Outlet elbow', cooling, 2, 97, 'lbf.in', '6-15', '221', { ...sealing, pattern: 'row', printed: { value: 11, unit: 'N.m' } }],

@@ -41,8 +41,9 @@ export async function appendToLog(ctx: AppendContext, entry: Entry): Promise<App
 /** Appends many entries in their order, with one lock and a few statements. @throws Error as appendToLog does */
 export async function appendAllToLog(ctx: AppendContext, entries: readonly Entry[]): Promise<Appended[]> {
   const texts = entries.map(entry => canonicalJson(entry.content))
+  // A key share, which every insert into a shop's table takes through its foreign key, does not stand against this lock.
   const shop = await Shop.findByPk(ctx.shop.id, {
-    attributes: ['id', 'logSequence', 'logHash'], lock: ctx.tx.LOCK.UPDATE, transaction: ctx.tx,
+    attributes: ['id', 'logSequence', 'logHash'], lock: ctx.tx.LOCK.NO_KEY_UPDATE, transaction: ctx.tx,
   })
   if (!shop) throw new Error('The shop whose log is to be written is not there.')
   let { logSequence: sequence, logHash: previousHash } = shop

@@ -5,6 +5,8 @@ import { database } from '../../../server/db/index'
 import { appendToLog, type Entry } from '../../../server/services/log/append'
 import { firstPreviousHash } from '../../../server/services/log/hash'
 import { listLog, logHead, verifyLog } from '../../../server/services/log/queries'
+import { createVehicle } from '../../../server/services/vehicles/vehicles'
+import { inTransaction } from '../../../server/transaction'
 import { buildShop, buildUser } from '../../factories/shop'
 import { useDatabase } from '../support/database'
 
@@ -17,7 +19,7 @@ describe('the log', () => {
   let actor: Actor
   beforeEach(async () => {
     shop = await buildShop()
-    actor = await buildUser(shop, 'technician')
+    actor = await buildUser(shop, 'foreman')
   })
 
   const append = (entry: Partial<Entry> = {}, at = now) => database().transaction(tx => appendToLog(
@@ -96,5 +98,12 @@ describe('the log', () => {
     await expect(append({ content: { nm: Number.NaN } })).rejects.toThrow()
     await expect(append({ kind: 'Signed' })).rejects.toThrow(/check constraint/)
     expect(await list()).toEqual({ items: [], next: null })
+  })
+
+  it('lets services that insert before they append run side by side', async () => {
+    const context = { actor, shop, now: new Date() }
+    await Promise.all(Array.from({ length: 16 }, (_, index) =>
+      inTransaction(context, ctx => createVehicle(ctx, { make: 'Invented', model: 'Shuttle', unitNumber: `S-${index}` }))))
+    expect(await verifyLog(shop.id)).toMatchObject({ ok: true, head: { sequence: 16 } })
   })
 })

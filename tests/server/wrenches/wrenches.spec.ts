@@ -39,7 +39,8 @@ ladder({
     'permissiblePercent': [0, 21],
     'intervalMonths': [undefined, 0, 1.5, 121],
     'intervalCycles': [0, 1.5],
-    'directions': [[], ['sideways']].slice(0, 1),
+    'directions': [[]],
+    'directions.0': ['sideways', 7],
   },
 })
 ladder({
